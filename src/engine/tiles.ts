@@ -1,0 +1,132 @@
+import type { Plan } from '../plan/plan.ts';
+import type { AxisSet } from '../plan/dependencies.ts';
+import type { TileShape } from './tile.ts';
+import { rowMap, tileShape } from './tile.ts';
+
+/**
+ * Where the values of one figure lie for the current tile. The space of a figure is spanned by
+ * those of its axes that run inside the tile.
+ */
+export class FigureSource {
+  /** Values over the figure's own space, or one per kept row when `compact`. */
+  values: Float64Array;
+  constructor(
+    values: Float64Array,
+    /** Axes of the space, slowest first. */
+    readonly space: readonly number[],
+    /** Row of the tile → entry of `values`; null when they are the same. */
+    readonly map: Int32Array | null,
+    /** True when `values` holds kept rows rather than the figure's space. */
+    readonly compact: boolean,
+  ) {
+    this.values = values;
+  }
+
+  /** Copies the figure for the kept rows (all rows of the tile when null) into a column. */
+  copyRows(rows: Int32Array | null, count: number, column: Float64Array, offset: number): void {
+    const { values, map } = this;
+    if (this.space.length === 0 && !this.compact) {
+      column.fill(values[0], offset, offset + count);
+    } else if (this.compact || (map === null && rows === null)) {
+      for (let row = 0; row < count; row++) column[offset + row] = values[row];
+    } else if (map === null) {
+      const kept = rows as Int32Array;
+      for (let row = 0; row < count; row++) column[offset + row] = values[kept[row]];
+    } else if (rows === null) {
+      for (let row = 0; row < count; row++) column[offset + row] = values[map[row]];
+    } else {
+      for (let row = 0; row < count; row++) column[offset + row] = values[map[rows[row]]];
+    }
+  }
+}
+
+/** The current tile of a plan: which digits stand, and where every figure's values are. */
+export class Tiles {
+  readonly shape: TileShape;
+  /** Positions of the prefix axes, slowest first. */
+  readonly digits: Int32Array;
+  chunk = 0;
+  private prefix = -1;
+  private readonly sources = new Map<string, FigureSource>();
+  private readonly standing: { readonly values: Float64Array; readonly axis: number; readonly source: FigureSource }[] = [];
+  private readonly cut: { readonly values: Float64Array; readonly source: FigureSource }[] = [];
+
+  constructor(
+    readonly plan: Plan,
+    tileRows?: number,
+  ) {
+    this.shape = tileShape(plan, tileRows);
+    this.digits = new Int32Array(this.shape.suffixStart);
+    for (const [name, value] of plan.fixed) this.declare(name, Float64Array.of(value), []);
+    plan.axes.forEach((axis, position) => {
+      axis.figures.forEach((name, k) => this.declareAxis(name, axis.values[k], position));
+    });
+  }
+
+  /** Axes among `axes` that run inside the tile, slowest first. */
+  runningAxes(axes: AxisSet): number[] {
+    const running: number[] = [];
+    for (let axis = this.shape.suffixStart; axis < this.plan.axes.length; axis++) {
+      if (axes & (1 << axis)) running.push(axis);
+    }
+    return running;
+  }
+
+  /** Length of an axis inside a tile. */
+  readonly lengthInTile = (axis: number): number =>
+    this.shape.chunks === 1 ? this.plan.axes[axis].size : this.shape.rows;
+
+  /** Every axis that runs inside the tile. */
+  allRunning(): number[] {
+    return this.runningAxes(~0);
+  }
+
+  declare(name: string, values: Float64Array, space: readonly number[], compact = false): FigureSource {
+    const all = this.allRunning();
+    const whole = space.length === all.length;
+    const map = whole ? null : rowMap(all, space, this.lengthInTile);
+    const source = new FigureSource(values, space, map, compact);
+    this.sources.set(name, source);
+    return source;
+  }
+
+  source(name: string): FigureSource {
+    const source = this.sources.get(name);
+    if (source === undefined) throw new Error(`no stage writes the figure ${name}`);
+    return source;
+  }
+
+  /** Sets the standing digits and, where the fastest axis is cut, the window on its values. */
+  moveTo(prefix: number, chunk: number): void {
+    const { axes } = this.plan;
+    if (prefix !== this.prefix) {
+      this.prefix = prefix;
+      let rest = prefix;
+      for (let axis = this.digits.length - 1; axis >= 0; axis--) {
+        const { size } = axes[axis];
+        this.digits[axis] = rest % size;
+        rest = Math.floor(rest / size);
+      }
+      for (const { values, axis, source } of this.standing) source.values[0] = values[this.digits[axis]];
+    }
+    this.chunk = chunk;
+    for (const { values, source } of this.cut) copyWindow(values, chunk * this.shape.rows, source.values);
+  }
+
+  private declareAxis(name: string, values: Float64Array, axis: number): void {
+    if (axis < this.shape.suffixStart) {
+      this.standing.push({ values, axis, source: this.declare(name, new Float64Array(1), []) });
+    } else if (this.shape.chunks > 1) {
+      this.cut.push({ values, source: this.declare(name, new Float64Array(this.shape.rows), [axis]) });
+    } else {
+      this.declare(name, values, [axis]);
+    }
+  }
+}
+
+/** Fills `window` from `start` on; past the end it repeats the last value, whose rows are never kept. */
+function copyWindow(values: Float64Array, start: number, window: Float64Array): void {
+  const available = Math.min(window.length, values.length - start);
+  window.set(values.subarray(start, start + available));
+  window.fill(values[values.length - 1], available);
+}
