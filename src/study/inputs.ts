@@ -541,7 +541,7 @@ export const inputDefinitions: readonly InputDefinition[] = [
 ].map(definition);
 
 const byPattern = new Map(inputDefinitions.map((entry) => [entry.path, entry]));
-const cgByKind = new Map(
+const cgByKind: ReadonlyMap<string, InputDefinition> = new Map(
   (['forward', 'aft'] as const).flatMap((end) =>
     cgKinds.map((kind) => [`cg.${end} ${kind}`, definition(cgRow(end, kind))] as const),
   ),
