@@ -1,0 +1,67 @@
+import type { Figure, TableColumn } from '../figures/figure.ts';
+import { figureNames, isWorksheetOnly } from '../figures/catalogue.ts';
+import { tableColumn } from '../figures/display.ts';
+import { figureOfInput, figuresOfStudy } from '../figures/study-figures.ts';
+import type { Plan } from '../plan/plan.ts';
+import { makePlan } from '../plan/plan.ts';
+import { buildStages } from '../stages/build-stages.ts';
+import { rangeLabels, reasonLabels } from '../stages/out-of-range.ts';
+import type { RequirementEdge } from '../stages/requirements.ts';
+import { requirementEdges } from '../stages/requirements.ts';
+import type { Study } from '../study/study.ts';
+import { combinationFigure } from './evaluator.ts';
+
+/** A study made ready for evaluation; the same on the main thread and in every worker. */
+export interface LaidOut {
+  readonly plan: Plan;
+  readonly figures: ReadonlyMap<string, Figure>;
+  /** Columns of the bulk table, in order. */
+  readonly columns: readonly TableColumn[];
+  readonly edges: readonly RequirementEdge[];
+}
+
+export function layOut(study: Study): LaidOut {
+  const edges = requirementEdges(study);
+  const plan = makePlan(study, buildStages(study), figureOfInput(study));
+  const figures = figuresOfStudy(study, {
+    requirements: edges.map((edge) => edge.label),
+    ranges: rangeLabels,
+    reasons: reasonLabels,
+  });
+  const columns = tableFigureNames(study, plan).map((name) => tableColumn(figureNamed(figures, name)));
+  return { plan, figures, columns, edges };
+}
+
+function figureNamed(figures: ReadonlyMap<string, Figure>, name: string): Figure {
+  const figure = figures.get(name);
+  if (figure === undefined) throw new Error(`the catalogue lacks the figure ${name}`);
+  return figure;
+}
+
+/** Figures that queries over a finished run need; they are in every table. */
+const alwaysKept = [
+  combinationFigure,
+  'static_margin_forward',
+  'static_margin_aft',
+  'feasible',
+  'fails_first',
+  'fails_count',
+  'fails',
+  'not_computed',
+  'largest_shortfall',
+];
+
+/** The varied numbers in the author's order, then every result in the order of computation. */
+function tableFigureNames(study: Study, plan: Plan): string[] {
+  const varied = plan.authorOrder.flatMap((position) => plan.axes[position].figures);
+  const results = figureNames.filter((name) => name !== combinationFigure && !isWorksheetOnly(name));
+  const all = [...new Set([combinationFigure, ...varied, ...results])];
+  if (study.columns === undefined) return all;
+  const wanted = new Set([
+    ...alwaysKept,
+    ...varied,
+    ...study.columns,
+    ...study.preferences.map((preference) => preference.figure),
+  ]);
+  return [...all.filter((name) => wanted.has(name)), ...study.columns.filter((name) => !all.includes(name))];
+}

@@ -1,0 +1,33 @@
+import type { Part } from '../plan/plan.ts';
+import type { Study } from '../study/study.ts';
+
+/** What every worker is given when it starts. */
+export interface WorkerSetup {
+  readonly study: Study;
+  readonly runFolder: string;
+}
+
+/** Main thread → worker: evaluate one part and write it to the run folder. */
+export interface EvaluatePart {
+  readonly kind: 'evaluate_part';
+  readonly part: Part;
+}
+
+/** Worker → main thread: the part is on disk under its final name. */
+export interface PartDone {
+  readonly kind: 'part_done';
+  readonly number: number;
+  /** Rows written, after skips. */
+  readonly rows: number;
+}
+
+/** Worker → main thread: the machine refused to write; nothing finished is lost. */
+export interface PartNotWritten {
+  readonly kind: 'part_not_written';
+  readonly number: number;
+  readonly code: 'DISK_FULL' | 'NO_PERMISSION' | 'WRITE_FAILED';
+  readonly message: string;
+  readonly remedy: string;
+}
+
+export type PartAnswer = PartDone | PartNotWritten;

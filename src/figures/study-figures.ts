@@ -1,0 +1,87 @@
+import type { Study } from '../study/study.ts';
+import { catalogueFigure, figureNames } from './catalogue.ts';
+import type { FigureName } from './catalogue.ts';
+import { inputFigure, inputFigureName } from './input-figures.ts';
+import type { Figure } from './figure.ts';
+
+type Wording = Partial<Pick<Figure, 'formula' | 'source'>>;
+
+const tableSlope: Wording = {
+  formula: 'a from the wing table at A, λ_e, Λ_e, times the Lowry–Polhamus slope at κ over that at κ = 1',
+  source: 'our own lifting-surface results; scaling by Lowry and Polhamus, NACA TN 3911, from memory',
+};
+const jonesSlope: Wording = {
+  formula: 'a = a_0 A/(E A + a_0/π), E semiperimeter/span, Prandtl–Glauert for M',
+  source: 'R. T. Jones, NACA TN 817, from memory',
+};
+
+/** Wording of figures whose formula the study's choice of methods settles. */
+function chosenWording(study: Study): Partial<Record<FigureName, Wording>> {
+  const { methods } = study;
+  const slope = { polhamus: {}, table: tableSlope, jones: jonesSlope }[methods.lift_slope];
+  return {
+    wing_lift_slope: slope,
+    tail_lift_slope: slope,
+    wing_aerodynamic_centre: {
+      formula: methods.aerodynamic_centre === 'table' ? 'h_ac = h_table' : 'h_ac = h_quarter',
+    },
+    downwash_gradient: { formula: methods.downwash === 'torenbeek' ? 'ε_α = ε_α,T' : 'ε_α = ε_α,H' },
+    body_moment_slope: bodyWording(study),
+  };
+}
+
+function bodyWording(study: Study): Wording {
+  if (study.body === undefined) return { formula: 'C_mα,b = 0: the study says there is no body', source: 'the study' };
+  if (study.methods.body_moment === 'quick_estimate') {
+    return {
+      formula: 'C_mα,b = K_f w² L/(S c)',
+      source: 'Gilruth and White, NACA TR 711, from memory, unconfirmed',
+    };
+  }
+  return { formula: 'C_mα,b = (π/2)(I_f + (1−ε_α) I_a)/(S c)', source: 'Multhopp, NACA TM 1036; upwash ours' };
+}
+
+/** Labels of the study's `choice` and `flags` figures. */
+export interface StudyLabels {
+  readonly requirements: readonly string[];
+  readonly ranges: readonly string[];
+  readonly reasons: readonly string[];
+}
+
+function labelsOf(name: FigureName, labels: StudyLabels): readonly string[] | undefined {
+  switch (name) {
+    case 'fails':
+    case 'fails_first':
+    case 'not_computed':
+      return labels.requirements;
+    case 'outside_fitted_range':
+      return labels.ranges;
+    case 'not_computed_because':
+      return labels.reasons;
+    default:
+      return undefined;
+  }
+}
+
+/**
+ * Every figure of a study, by name: first the numbers it gives, then what is worked out, in the
+ * order of computation. A number that the study gives itself keeps its catalogue wording but is
+ * marked as given.
+ */
+export function figuresOfStudy(study: Study, labels: StudyLabels): Map<string, Figure> {
+  const figures = new Map<string, Figure>();
+  for (const path of study.inputs.keys()) {
+    const figure = inputFigure(path, study.cg);
+    figures.set(figure.name, figure);
+  }
+  const wording = chosenWording(study);
+  for (const name of figureNames) {
+    if (figures.has(name)) continue;
+    figures.set(name, { ...catalogueFigure(name, labelsOf(name, labels)), ...wording[name] });
+  }
+  return figures;
+}
+
+export function figureOfInput(study: Pick<Study, 'cg'>): (path: string) => string {
+  return (path) => inputFigureName(path, study.cg);
+}
