@@ -104,19 +104,3 @@ export function sweepTangentAt(
 ): number {
   return tangentFrom - ((4 / aspectRatio) * (to - from) * (1 - taper)) / (1 + taper);
 }
-
-/**
- * Semiperimeter of the plan divided by the span, E [-]: half the sum of the edges' secants plus the
- * tip chord over the span. E = 1 + 1/A for a rectangular wing.
- * @param aspectRatio         A, > 0 [-]
- * @param taper               tip chord / root chord, ≥ 0 [-]
- * @param quarterChordTangent tangent of the quarter-chord sweep [-]
- * Exact. For lift-slope.ts, `jonesLiftSlope`.
- */
-export function semiperimeterRatio(aspectRatio: number, taper: number, quarterChordTangent: number): number {
-  const quarterChord = 0.25;
-  const leading = sweepTangentAt(quarterChordTangent, quarterChord, 0, aspectRatio, taper);
-  const trailing = sweepTangentAt(quarterChordTangent, quarterChord, 1, aspectRatio, taper);
-  const tipChordOverSpan = (2 * taper) / (aspectRatio * (1 + taper));
-  return (Math.sqrt(1 + leading ** 2) + Math.sqrt(1 + trailing ** 2)) / 2 + tipChordOverSpan;
-}

@@ -25,7 +25,7 @@ export function tailVolume(
  * @param meanAerodynamicChord c, of the wing, > 0 [m]
  * Exact, a definition.
  */
-export function tailAreaFromVolume(
+export function areaFromVolume(
   volume: number,
   arm: number,
   wingArea: number,
