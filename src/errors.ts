@@ -7,9 +7,11 @@
 export const studyFaultCodes = {
   UNREADABLE_YAML: 'the file is not well-formed YAML',
   ALIAS_REFUSED: 'YAML anchors and aliases are not used in studies',
+  DUPLICATE_KEY: 'one key written twice in a map',
   UNKNOWN_KEY: 'a key that studies do not have',
   MISSING_KEY: 'a key that is needed is not there',
   WRONG_TYPE: 'a text, number, list or map stands where another is wanted',
+  UNKNOWN_WORD: 'a word that is not one of those offered',
   MISSING_UNIT: 'a dimensional number without its unit',
   UNKNOWN_UNIT: 'a unit that is not known',
   WRONG_DIMENSION: 'a unit of the wrong kind',

@@ -1,0 +1,71 @@
+/**
+ * The one file that touches mathjs: what a unit's text means. Only mathjs' unit parts are taken,
+ * because its whole index takes over a second to load; the build bundles this file by itself.
+ */
+import { create, createUnitDependencies, type Unit, unitDependencies } from 'mathjs';
+
+export type UnitKind =
+  | 'length'
+  | 'area'
+  | 'volume'
+  | 'mass'
+  | 'speed'
+  | 'angle'
+  | 'per_angle'
+  | 'force'
+  | 'other';
+
+export interface UnitMeaning {
+  readonly kind: UnitKind;
+  /** SI value of one such unit; 0 for kinds that studies do not use. */
+  readonly factor: number;
+}
+
+const math = create({ unitDependencies, createUnitDependencies });
+
+/** mathjs reads kt as kilotonnes; in this trade it is the knot, 1852 m an hour by definition. */
+const knot = math.unit(1852 / 3600, 'm/s');
+math.createUnit({ kt: { definition: knot, aliases: ['kts', 'kn', 'knot', 'knots'] } }, { override: true });
+math.createUnit({ mph: { definition: math.unit(1609.344 / 3600, 'm/s') } }, { override: true });
+
+const si: readonly (readonly [Exclude<UnitKind, 'other'>, string])[] = [
+  ['length', 'm'],
+  ['area', 'm^2'],
+  ['volume', 'm^3'],
+  ['mass', 'kg'],
+  ['speed', 'm/s'],
+  ['angle', 'rad'],
+  ['per_angle', '1/rad'],
+  ['force', 'N'],
+];
+const references = si.map(([kind, text]) => [kind, text, math.unit(1, text)] as const);
+
+/** `m²`, `m2` and `m^2` are one; so are `/rad`, `1/rad` and `per rad`. */
+function spelling(text: string): string {
+  return text
+    .replace(/°|º/g, 'deg')
+    .replace(/²/g, '^2')
+    .replace(/³/g, '^3')
+    .replace(/·/g, '*')
+    .replace(/^(?:per\s+|1\s*\/\s*|\/\s*)/, '1/')
+    .replace(/\b([a-zA-Z]+)([23])\b/g, '$1^$2');
+}
+
+/** Letters, powers, products and quotients: all that a unit needs, so nothing else reaches mathjs. */
+const unitText = /^(?:1\s*\/\s*)?[a-zA-Z][a-zA-Z0-9^*/ -]{0,39}$/;
+
+/** What a unit's text means; undefined for a text that is no unit. */
+export function unitMeaning(text: string): UnitMeaning | undefined {
+  const spelt = spelling(text.trim());
+  if (!unitText.test(spelt)) return undefined;
+  let unit: Unit;
+  try {
+    unit = math.unit(1, spelt);
+  } catch {
+    return undefined;
+  }
+  for (const [kind, siText, reference] of references) {
+    if (unit.equalBase(reference)) return { kind, factor: unit.toNumber(siText) };
+  }
+  return { kind: 'other', factor: 0 };
+}
