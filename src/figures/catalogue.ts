@@ -52,7 +52,14 @@ const entries = {
     'y_c = (2/S)∫c y dy = (b/6)(1+2λ)/(1+λ)',
     exact,
   ),
-  mac_leading_edge: entry('x_c', 'length', 'Station of the leading edge of the MAC.', 'x_c = x_r + (2/S)∫c x_LE dy', exact),
+  mac_leading_edge_offset: entry(
+    'Δx_c',
+    'length',
+    'Leading edge of the MAC aft of the leading edge on the centreline.',
+    'Δx_c = (2/S)∫c x_LE dy = y_c tan Λ_LE for one panel',
+    exact,
+  ),
+  mac_leading_edge: entry('x_c', 'length', 'Station of the leading edge of the MAC.', 'x_c = x_r + Δx_c', exact),
   mac_height: entry('z_c', 'length', 'Height of the MAC above the plane of the root chord.', 'z_c = (2/S)∫c z dy', exact),
   quarter_mac_station: entry('x_¼', 'length', 'Station of the quarter point of the MAC.', 'x_¼ = x_c + c/4', definition),
   equivalent_wing_span: entry(
@@ -99,6 +106,13 @@ const entries = {
     'Lift-curve slope of the wing alone, at the condition’s Mach number.',
     'a = 2πA/(2 + √(A²β²/κ² (1 + tan²Λ_½/β²) + 4)), κ = a_0/2π, β² = 1 − M²',
     polhamus,
+  ),
+  body_width_at_wing: entry(
+    'd',
+    'length',
+    'Width of the body at the wing root’s quarter chord.',
+    'd from the body stations, linear between them',
+    study,
   ),
   wing_body_lift_slope: entry(
     'a_wb',
@@ -161,11 +175,32 @@ const entries = {
     'Glauert, thin-aerofoil theory, exact; k_δ the study',
   ),
 
+  wake_length: entry(
+    'l_w',
+    'length',
+    'Wing root’s trailing edge to the tail’s quarter-MAC; empty where the tail is not behind the wing.',
+    'l_w = x_t − x_r − c_r',
+    definition,
+  ),
+  root_angle_of_attack: entry(
+    'α_r',
+    'angle',
+    'Angle of attack of the root chord at the condition’s lift.',
+    'α_r = C_L/a + α_L0 + washout · 2y_c/b',
+    'strip mean of the twist, ours',
+  ),
+  wing_lift_slope_ratio: entry(
+    'a(M)/a(0)',
+    'ratio',
+    'Lift-curve slope of the wing at the condition’s Mach number over that at Mach 0.',
+    'a(M)/a(0)',
+    'as a',
+  ),
   wake_height: entry(
     'z_wake',
     'length',
     'Height of the tail’s quarter-MAC above the plane of the wake at the condition’s lift.',
-    'z_wake = z_t − l (α − 2C_L/(πA)), α = C_L/a + α_L0',
+    'z_wake = z_t cos α_r − l (sin α_r − 2C_L/(πA))',
     'ours',
   ),
   downwash_torenbeek: entry(
@@ -203,6 +238,13 @@ const entries = {
     'Body aft of the root trailing edge, in the downwash.',
     'I_a = ∫w² ξ dx, ξ rising from 0 to 1 at the tail',
     'Multhopp, NACA TM 1036',
+  ),
+  body_wing_place: entry(
+    'x_w/L',
+    'ratio',
+    'Wing root’s quarter chord along the body, for the quick estimate.',
+    'x_w/L',
+    definition,
   ),
   body_moment_slope: entry(
     'C_mα,b',
@@ -343,6 +385,12 @@ const worksheetOnly: ReadonlySet<FigureName> = new Set<FigureName>([
   'body_moment_aft',
   'tail_lift_share',
   'mac_height',
+  'mac_leading_edge_offset',
+  'body_width_at_wing',
+  'wake_length',
+  'root_angle_of_attack',
+  'wing_lift_slope_ratio',
+  'body_wing_place',
 ]);
 
 export function isWorksheetOnly(name: string): boolean {

@@ -1,0 +1,206 @@
+import { bodyMomentSlope, multhoppAft, multhoppForward } from '../methods/body.ts';
+import { quickBodyMoment } from '../methods/body-estimates.ts';
+import { bodyStationPlace, bodyWidthAt } from '../methods/body-stations.ts';
+import type { Study } from '../study/study.ts';
+import type { Stage } from './stage.ts';
+
+/** Where wing and tail stand in the baseline; body stations move with respect to these [m]. */
+export interface BaselinePlaces {
+  readonly rootLeadingEdge: number;
+  readonly rootChord: number;
+  /** Tail's quarter-MAC. */
+  readonly tail: number;
+}
+
+/** Distance from the wing root's trailing edge to the tail's quarter-MAC; empty where it is not positive. */
+export const wakeLengthStage: Stage = {
+  name: 'wake length',
+  reads: ['wing_root_leading_edge', 'wing_root_chord', 'quarter_mac_station', 'tail_arm'],
+  writes: ['wake_length'],
+  cost: 3,
+  kernel: (count, [leadingEdge, chord, quarter, arm], [length]) => {
+    for (let row = 0; row < count; row++) {
+      const behind = quarter[row] + arm[row] - leadingEdge[row] - chord[row];
+      length[row] = behind > 0 ? behind : Number.NaN;
+    }
+  },
+};
+
+/** Body width at the wing, upwash and downwash integrals, and the body's moment slope. */
+export function bodyStages(study: Pick<Study, 'body' | 'methods'>, places: BaselinePlaces): Stage[] {
+  if (study.body === undefined) return [noBodyStage];
+  const stations = new BodyReader(study.body);
+  const moment = study.methods.body_moment === 'multhopp' ? multhoppStage : quickStage(stations, places);
+  return [widthStage(stations, places), forwardStage(stations, places), aftStage(stations, places), moment];
+}
+
+const noBodyStage: Stage = {
+  name: 'no body',
+  reads: [],
+  writes: ['body_width_at_wing', 'body_moment_forward', 'body_moment_aft', 'body_moment_slope'],
+  cost: 1,
+  kernel: (count, _, outputs) => {
+    for (const output of outputs) output.fill(0, 0, count);
+  },
+};
+
+const readsPerStation = 2;
+
+/** Reads the stations of the body out of a kernel's first inputs. */
+class BodyReader {
+  readonly reads: string[] = [];
+  readonly at: Float64Array;
+  readonly widths: Float64Array;
+  readonly count: number;
+  boomWidth = 0;
+  private readonly boom: boolean;
+
+  constructor(body: NonNullable<Study['body']>) {
+    this.count = body.stations;
+    this.at = new Float64Array(this.count);
+    this.widths = new Float64Array(this.count);
+    this.boom = body.boom;
+    for (let i = 1; i <= this.count; i++) this.reads.push(`body_stations_${i}_at`, `body_stations_${i}_width`);
+    if (this.boom) this.reads.push('body_boom_width');
+  }
+
+  /** Inputs that `read` takes from the front of the list. */
+  get size(): number {
+    return this.reads.length;
+  }
+
+  get hasBoom(): boolean {
+    return this.boom;
+  }
+
+  read(inputs: readonly Float64Array[], row: number): void {
+    for (let i = 0; i < this.count; i++) {
+      this.at[i] = inputs[readsPerStation * i][row];
+      this.widths[i] = inputs[readsPerStation * i + 1][row];
+    }
+    if (this.boom) this.boomWidth = inputs[readsPerStation * this.count][row];
+  }
+}
+
+function widthStage(body: BodyReader, places: BaselinePlaces): Stage {
+  const quarterChord = places.rootLeadingEdge + places.rootChord / 4;
+  return {
+    name: 'body width at the wing',
+    reads: body.reads,
+    writes: ['body_width_at_wing'],
+    cost: 30,
+    kernel: (count, inputs, [width]) => {
+      for (let row = 0; row < count; row++) {
+        body.read(inputs, row);
+        width[row] = bodyWidthAt(body.count, body.at, body.widths, quarterChord);
+      }
+    },
+  };
+}
+
+function forwardStage(body: BodyReader, places: BaselinePlaces): Stage {
+  const own = body.size;
+  return {
+    name: 'body ahead of the wing',
+    reads: [...body.reads, 'wing_root_chord', 'wing_span', 'wing_area', 'wing_lift_slope'],
+    writes: ['body_moment_forward'],
+    cost: 600,
+    kernel: (count, inputs, [forward]) => {
+      const chord = inputs[own];
+      const span = inputs[own + 1];
+      const area = inputs[own + 2];
+      const slope = inputs[own + 3];
+      for (let row = 0; row < count; row++) {
+        body.read(inputs, row);
+        forward[row] = multhoppForward(
+          body.count,
+          body.at,
+          body.widths,
+          places.rootLeadingEdge,
+          chord[row],
+          span[row],
+          area[row],
+          slope[row],
+        );
+      }
+    },
+  };
+}
+
+function aftStage(body: BodyReader, places: BaselinePlaces): Stage {
+  const own = body.size;
+  const trailingEdge = places.rootLeadingEdge + places.rootChord;
+  return {
+    name: 'body aft of the wing',
+    reads: [...body.reads, 'wake_length'],
+    writes: ['body_moment_aft'],
+    cost: 120,
+    kernel: (count, inputs, [aft]) => {
+      const wake = inputs[own];
+      for (let row = 0; row < count; row++) {
+        body.read(inputs, row);
+        aft[row] = multhoppAft(
+          body.count,
+          body.at,
+          body.widths,
+          trailingEdge,
+          places.tail,
+          wake[row],
+          body.boomWidth,
+        );
+      }
+    },
+  };
+}
+
+const multhoppStage: Stage = {
+  name: 'body moment',
+  reads: ['body_moment_forward', 'body_moment_aft', 'downwash_gradient', 'wing_area', 'mac'],
+  writes: ['body_moment_slope'],
+  cost: 5,
+  kernel: (count, [forward, aft, downwash, area, mac], [slope]) => {
+    for (let row = 0; row < count; row++) {
+      slope[row] = bodyMomentSlope(forward[row], aft[row], downwash[row], area[row], mac[row]);
+    }
+  },
+};
+
+/** The one-factor estimate, with the body's length and the wing's place along it as they follow the tail. */
+function quickStage(body: BodyReader, places: BaselinePlaces): Stage {
+  const own = body.size;
+  return {
+    name: 'body moment, quick estimate',
+    reads: [...body.reads, 'wing_root_chord', 'wake_length', 'wing_area', 'mac'],
+    writes: ['body_moment_slope', 'body_wing_place'],
+    cost: 60,
+    kernel: (count, inputs, [slope, place]) => {
+      const chord = inputs[own];
+      const wake = inputs[own + 1];
+      const area = inputs[own + 2];
+      const mac = inputs[own + 3];
+      for (let row = 0; row < count; row++) {
+        body.read(inputs, row);
+        const ahead = places.rootLeadingEdge - body.at[0];
+        const last = body.at[body.count - 1] - places.rootLeadingEdge;
+        const end = bodyStationPlace(
+          last,
+          places.rootChord,
+          places.tail - places.rootLeadingEdge,
+          last,
+          chord[row],
+          chord[row] + wake[row],
+          body.hasBoom,
+        );
+        const length = ahead + end;
+        place[row] = (ahead + chord[row] / 4) / length;
+        slope[row] = quickBodyMoment(greatest(body.widths), length, area[row], mac[row], place[row]);
+      }
+    },
+  };
+}
+
+function greatest(values: Float64Array): number {
+  let most = 0;
+  for (let i = 0; i < values.length; i++) if (values[i] > most) most = values[i];
+  return most;
+}

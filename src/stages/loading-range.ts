@@ -1,0 +1,70 @@
+import { fractionOfMac, stationOfFraction, staticMargin } from '../methods/neutral-point.ts';
+import type { CgKind, Study } from '../study/study.ts';
+import type { Stage } from './stage.ts';
+
+const inputSuffix: Record<CgKind, string> = {
+  percent_mac: '',
+  station: '_station',
+  behind_mac_leading_edge: '_behind_mac_leading_edge',
+};
+
+/** One end of the loading range as a fraction of the MAC and as a station, from whichever is given. */
+function cgStage(end: 'forward' | 'aft', kind: CgKind): Stage {
+  const fraction = `cg_${end}`;
+  const station = `cg_${end}_station`;
+  return {
+    name: `${end} CG`,
+    reads: [fraction + inputSuffix[kind], 'mac_leading_edge', 'mac'],
+    writes: [kind === 'percent_mac' ? null : fraction, kind === 'station' ? null : station],
+    cost: 4,
+    kernel: (count, [given, leadingEdge, mac], [asFraction, asStation]) => {
+      for (let row = 0; row < count; row++) {
+        const x0 = leadingEdge[row];
+        const c = mac[row];
+        const h =
+          kind === 'percent_mac'
+            ? given[row]
+            : kind === 'station'
+              ? fractionOfMac(given[row], x0, c)
+              : given[row] / c;
+        asFraction[row] = h;
+        asStation[row] = kind === 'station' ? given[row] : stationOfFraction(h, x0, c);
+      }
+    },
+  };
+}
+
+export function loadingRangeStages({ cg }: Pick<Study, 'cg'>): Stage[] {
+  return [cgStage('forward', cg.forward), cgStage('aft', cg.aft)];
+}
+
+/** Margins at both ends of the loading range. */
+export const marginsStage: Stage = {
+  name: 'static margins',
+  reads: ['neutral_point', 'cg_forward', 'cg_aft'],
+  writes: ['static_margin_forward', 'static_margin_aft'],
+  cost: 2,
+  kernel: (count, [point, forward, aft], [marginForward, marginAft]) => {
+    for (let row = 0; row < count; row++) {
+      marginForward[row] = staticMargin(point[row], forward[row]);
+      marginAft[row] = staticMargin(point[row], aft[row]);
+    }
+  },
+};
+
+/** The CG window that the band allows; an end is empty where the band has no such edge. */
+export function windowStage({ band }: Pick<Study, 'band'>): Stage {
+  const { lower = Number.NaN, upper = Number.NaN } = band;
+  return {
+    name: 'CG window',
+    reads: ['neutral_point'],
+    writes: ['cg_window_forward', 'cg_window_aft'],
+    cost: 2,
+    kernel: (count, [point], [forward, aft]) => {
+      for (let row = 0; row < count; row++) {
+        forward[row] = point[row] - upper;
+        aft[row] = point[row] - lower;
+      }
+    },
+  };
+}

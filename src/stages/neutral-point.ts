@@ -1,0 +1,104 @@
+import {
+  bodyStep,
+  neutralPoint,
+  tailLiftShare,
+  tailPosition,
+  tailStep,
+  verticalPositionShift,
+  wholeLiftSlope,
+} from '../methods/neutral-point.ts';
+import type { Study } from '../study/study.ts';
+import type { Stage } from './stage.ts';
+
+/** Where the tail's lift acts, and its share in the lift of the whole. */
+export const sharesStage: Stage = {
+  name: 'shares of lift',
+  reads: [
+    'tail_lift_slope',
+    'tail_dynamic_pressure_ratio',
+    'tail_area',
+    'wing_area',
+    'downwash_gradient',
+    'wing_body_lift_slope',
+  ],
+  writes: ['tail_lift_share', 'lift_slope'],
+  cost: 5,
+  kernel: (count, [at, eta, tailArea, area, downwash, withBody], [share, whole]) => {
+    for (let row = 0; row < count; row++) {
+      share[row] = tailLiftShare(at[row], eta[row], tailArea[row] / area[row], downwash[row]);
+      whole[row] = wholeLiftSlope(withBody[row], share[row]);
+    }
+  },
+};
+
+/** Effect of the wing's height over the CG; nothing when the study does not give the CG's height. */
+export function heightStage({ cg }: Pick<Study, 'cg'>): Stage {
+  if (!cg.heightGiven) {
+    return {
+      name: 'vertical position',
+      reads: [],
+      writes: ['neutral_point_height'],
+      cost: 1,
+      kernel: (count, _, [shift]) => {
+        shift.fill(0, 0, count);
+      },
+    };
+  }
+  return {
+    name: 'vertical position',
+    reads: [
+      'wing_height',
+      'mac_height',
+      'cg_above_datum',
+      'mac',
+      'lift_coefficient',
+      'wing_lift_slope',
+      'wing_aspect_ratio',
+      'span_efficiency',
+    ],
+    writes: ['neutral_point_height'],
+    cost: 10,
+    kernel: (count, [wing, rise, cgHeight, mac, cl, a, A, e], [shift]) => {
+      for (let row = 0; row < count; row++) {
+        const height = (wing[row] + rise[row] - cgHeight[row]) / mac[row];
+        shift[row] = verticalPositionShift(height, cl[row], a[row], A[row], e[row]);
+      }
+    },
+  };
+}
+
+/** The neutral point, step by step. */
+export const neutralPointStage: Stage = {
+  name: 'neutral point',
+  reads: [
+    'wing_aerodynamic_centre',
+    'tail_arm',
+    'mac',
+    'tail_mac',
+    'tail_aerodynamic_centre',
+    'tail_lift_share',
+    'lift_slope',
+    'body_moment_slope',
+    'neutral_point_height',
+    'mac_leading_edge',
+  ],
+  writes: ['neutral_point_wing', 'neutral_point_tail', 'neutral_point_body', 'neutral_point', 'neutral_point_station'],
+  cost: 15,
+  kernel: (
+    count,
+    [centre, arm, mac, tailMac, tailCentre, share, whole, bodySlope, byHeight, leadingEdge],
+    [byWing, byTail, byBody, point, station],
+  ) => {
+    for (let row = 0; row < count; row++) {
+      const ht = tailPosition(arm[row], mac[row], tailMac[row], tailCentre[row]);
+      const tail = tailStep(centre[row], ht, share[row], whole[row]);
+      const body = bodyStep(bodySlope[row], whole[row]);
+      const hn = neutralPoint(centre[row], tail, body, byHeight[row]);
+      byWing[row] = centre[row];
+      byTail[row] = tail;
+      byBody[row] = body;
+      point[row] = hn;
+      station[row] = leadingEdge[row] + hn * mac[row];
+    }
+  },
+};

@@ -1,0 +1,154 @@
+import { insideAtmosphere } from '../methods/atmosphere.ts';
+import { quickBodyMomentInRange } from '../methods/body-estimates.ts';
+import { handbookInRange, torenbeekInRange } from '../methods/downwash.ts';
+import { bodyCarryOverInRange, jonesInRange } from '../methods/lift-slope.ts';
+import { insideWingTable } from '../methods/wing-table.ts';
+import { sweepTangentAt } from '../methods/planform.ts';
+import type { Study } from '../study/study.ts';
+import type { Stage } from './stage.ts';
+
+/** Formulas whose use outside their fitted range is flagged; each is one bit, in this order. */
+export const rangeLabels = [
+  'wing table (wing)',
+  'wing table (tail)',
+  'lift slope by Jones (wing)',
+  'lift slope by Jones (tail)',
+  'body carry-over',
+  'downwash by Torenbeek',
+  'downwash by the handbook',
+  'quick body estimate',
+  'standard atmosphere',
+] as const;
+
+type RangeLabel = (typeof rangeLabels)[number];
+
+const bitOf = Object.fromEntries(rangeLabels.map((label, k) => [label, 2 ** k])) as Record<RangeLabel, number>;
+
+/** One check: the figures it reads and whether the formula is in its range. */
+interface RangeCheck {
+  readonly label: RangeLabel;
+  readonly reads: readonly string[];
+  readonly inside: (values: readonly number[]) => boolean;
+}
+
+/** The checks that apply to a study: those of the methods it uses. */
+function checksOf(study: Study): RangeCheck[] {
+  const { methods, tail } = study;
+  const wing = ['wing_aspect_ratio', 'wing_formula_taper', 'wing_formula_sweep'];
+  const tailReads = ['tail_aspect_ratio', 'tail_taper', `tail_sweep_${tail.sweep}`];
+  const sweepFrom = tail.sweep === 'quarter_chord' ? 0.25 : 0;
+  const tailSweep = (A: number, taper: number, sweep: number) =>
+    Math.atan(sweepTangentAt(Math.tan(sweep), sweepFrom, 0.25, A, taper));
+  const checks: RangeCheck[] = [
+    {
+      label: 'body carry-over',
+      reads: ['body_width_at_wing', 'wing_span'],
+      inside: ([width, span]) => bodyCarryOverInRange(width / span),
+    },
+    {
+      label: 'standard atmosphere',
+      reads: ['conditions_1_height'],
+      inside: ([height]) => insideAtmosphere(height),
+    },
+  ];
+  if (methods.aerodynamic_centre === 'table' || methods.lift_slope === 'table') {
+    checks.push(
+      { label: 'wing table (wing)', reads: wing, inside: ([A, taper, sweep]) => insideWingTable(A, taper, sweep) },
+      {
+        label: 'wing table (tail)',
+        reads: tailReads,
+        inside: ([A, taper, sweep]) => insideWingTable(A, taper, tailSweep(A, taper, sweep)),
+      },
+    );
+  }
+  if (methods.lift_slope === 'jones') {
+    checks.push(
+      { label: 'lift slope by Jones (wing)', reads: wing, inside: ([, , sweep]) => jonesInRange(sweep) },
+      {
+        label: 'lift slope by Jones (tail)',
+        reads: tailReads,
+        inside: ([A, taper, sweep]) => jonesInRange(tailSweep(A, taper, sweep)),
+      },
+    );
+  }
+  checks.push(downwashCheck(study));
+  if (methods.body_moment === 'quick_estimate' && study.body !== undefined) {
+    checks.push({
+      label: 'quick body estimate',
+      reads: ['body_wing_place'],
+      inside: ([place]) => quickBodyMomentInRange(place),
+    });
+  }
+  return checks;
+}
+
+function downwashCheck({ methods }: Study): RangeCheck {
+  if (methods.downwash === 'torenbeek') {
+    return {
+      label: 'downwash by Torenbeek',
+      reads: ['wing_formula_taper', 'wing_formula_sweep', 'tail_arm', 'wing_span'],
+      inside: ([taper, sweep, arm, span]) => torenbeekInRange(taper, sweep, (2 * arm) / span),
+    };
+  }
+  return {
+    label: 'downwash by the handbook',
+    reads: ['wing_formula_sweep', 'tail_above_wing_root_chord', 'tail_arm', 'wing_span'],
+    inside: ([sweep, height, arm, span]) => handbookInRange(sweep, height / span, arm / span),
+  };
+}
+
+/** One stage a check, so that each is evaluated only as often as its own axes ask, and one that gathers the bits. */
+export function rangeStages(study: Study): Stage[] {
+  const checks = checksOf(study);
+  const stages = checks.map((check, index) => checkStage(check, `range_bit_${index}`));
+  const gather: Stage = {
+    name: 'ranges',
+    reads: checks.map((_, index) => `range_bit_${index}`),
+    writes: ['outside_fitted_range'],
+    cost: 2 * checks.length,
+    kernel: (count, inputs, [flags]) => {
+      flags.fill(0, 0, count);
+      for (const bits of inputs) {
+        for (let row = 0; row < count; row++) flags[row] += bits[row];
+      }
+    },
+  };
+  return [...stages, gather];
+}
+
+function checkStage({ label, reads, inside }: RangeCheck, writes: string): Stage {
+  const values = new Array<number>(reads.length).fill(0);
+  const bit = bitOf[label];
+  return {
+    name: `range of ${label}`,
+    reads,
+    writes: [writes],
+    cost: 10,
+    kernel: (count, inputs, [bits]) => {
+      for (let row = 0; row < count; row++) {
+        for (let k = 0; k < values.length; k++) values[k] = inputs[k][row];
+        bits[row] = inside(values) ? 0 : bit;
+      }
+    },
+  };
+}
+
+/** Why a combination could not be worked out. */
+export const reasonLabels = [
+  'the tail’s quarter-MAC is not behind the wing root’s trailing edge',
+  'the neutral point is not finite',
+] as const;
+
+/** Writes the reason's index, or an empty cell where the neutral point was worked out. */
+export const reasonStage: Stage = {
+  name: 'reasons',
+  reads: ['wake_length', 'neutral_point'],
+  writes: ['not_computed_because'],
+  cost: 2,
+  kernel: (count, [wake, point], [reason]) => {
+    for (let row = 0; row < count; row++) {
+      if (Number.isFinite(point[row])) reason[row] = Number.NaN;
+      else reason[row] = Number.isNaN(wake[row]) ? 0 : 1;
+    }
+  },
+};
