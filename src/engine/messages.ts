@@ -1,13 +1,14 @@
+import type { MachineFaultCode } from '../errors.ts';
 import type { Part } from '../plan/plan.ts';
 import type { Study } from '../study/study.ts';
 
 /** What every worker is given when it starts. */
 export interface WorkerSetup {
   readonly study: Study;
-  readonly runFolder: string;
+  readonly partsFolder: string;
 }
 
-/** Main thread → worker: evaluate one part and write it to the run folder. */
+/** Main thread → worker: evaluate one part and write it into the parts folder. */
 export interface EvaluatePart {
   readonly kind: 'evaluate_part';
   readonly part: Part;
@@ -25,7 +26,7 @@ export interface PartDone {
 export interface PartNotWritten {
   readonly kind: 'part_not_written';
   readonly number: number;
-  readonly code: 'DISK_FULL' | 'NO_PERMISSION' | 'WRITE_FAILED';
+  readonly code: MachineFaultCode;
   readonly message: string;
   readonly remedy: string;
 }

@@ -2,9 +2,10 @@ import type { Plan } from '../plan/plan.ts';
 
 /**
  * Rows of one tile at most. A tile must be large enough to spread the cost of a stage's call and
- * small enough that its columns stay in the processor's cache; 512 to 2048 measured alike.
+ * small enough that its columns stay in the processor's cache: on the tourer study 2048 and 4096
+ * measured alike and twice as fast as 1024, whose tiles hold only 65 rows there.
  */
-export const tileLimit = 1024;
+export const tileLimit = 2048;
 
 /**
  * How a plan is cut into tiles: the fastest axes run through all their values inside one tile
