@@ -208,8 +208,7 @@ class TreeBuilder {
       this.#refuseExtras(key);
       const word = key.source ?? String(key.value);
       if (this.#keyIsRefused(word, span, entries)) continue;
-      const value = item.value ? this.node(item.value) : empty(span);
-      entries.set(word, { key: span, value: value.span.end > value.span.start ? value : { ...value, span } });
+      entries.set(word, { key: span, value: item.value ? owned(this.node(item.value), span) : empty(span) });
     }
     return { kind: 'map', entries, span: spanOf(map) };
   }
@@ -256,6 +255,12 @@ class TreeBuilder {
       typeof value === 'number' || typeof value === 'boolean' || value === null ? value : String(value);
     return { kind: 'scalar', text: node.source ?? String(value), value: plain, span };
   }
+}
+
+/** An empty value has no extent of its own: its key stands for it. */
+function owned(node: SourceNode, key: Span): SourceNode {
+  if (node.kind === 'map') return { ...node, owner: key };
+  return node.kind === 'scalar' && node.text === '' ? { ...node, span: key } : node;
 }
 
 function empty(span: Span): ScalarNode {

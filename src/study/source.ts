@@ -29,6 +29,8 @@ export interface MapNode {
   readonly kind: 'map';
   readonly entries: ReadonlyMap<string, MapEntry>;
   readonly span: Span;
+  /** The key that holds this map; undefined for list entries and the whole study. */
+  readonly owner?: Span;
 }
 export type SourceNode = ScalarNode | ListNode | MapNode;
 
@@ -44,7 +46,7 @@ export function valueIn(node: SourceNode | undefined, key: string): SourceNode |
   return node?.kind === 'map' ? node.entries.get(key)?.value : undefined;
 }
 
-/** The key itself where there is one, else the whole node. */
+/** The key itself where there is one, else the short place of the whole node. */
 export function keySpan(node: SourceNode, key: string): Span {
   return (node.kind === 'map' ? node.entries.get(key)?.key : undefined) ?? firstOf(node);
 }
@@ -54,9 +56,10 @@ export function wordIn(node: SourceNode | undefined, key: string): string | unde
   return value?.kind === 'scalar' && typeof value.value === 'string' ? value.value : undefined;
 }
 
-/** A short place for a whole node: the first key of a map, so that the mark is not a page long. */
+/** A short place for a whole node: of a map its own key or its first, so that the mark is not a page long. */
 export function firstOf(node: SourceNode): Span {
   if (node.kind !== 'map') return node.span;
+  if (node.owner) return node.owner;
   for (const entry of node.entries.values()) return entry.key;
   return node.span;
 }

@@ -93,7 +93,7 @@ function tellMissing(path: SourcePath, root: SourceNode, faults: FaultList): voi
     pathText(path) === 'aeroplane.body'
       ? 'Add body: with its stations, or say body: none.'
       : `Add ${key}: to ${where}.`;
-  const span = parent.key ?? (path.length > 1 ? parent.node.span : firstOf(parent.node));
+  const span = firstOf(parent.node);
   // several keys can be missing from one map: each is told
   faults.addBeside('MISSING_KEY', span, `${where} has no ${key}.`, remedy);
 }

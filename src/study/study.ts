@@ -37,6 +37,8 @@ export interface WingChoices {
   readonly panels: readonly { readonly sweep: SweepKind }[];
   /** How panel widths are given: as lengths, or as fractions of the semi-span that add up to 1. */
   readonly panelWidth: 'width' | 'span_fraction';
+  /** Name of the shipped section; undefined where the study gives its own numbers. */
+  readonly section?: string;
 }
 
 export interface TailChoices {
@@ -47,6 +49,8 @@ export interface TailChoices {
   readonly place: 'arm' | 'station';
   readonly planform: 'aspect_ratio' | 'span';
   readonly sweep: SweepKind;
+  /** Name of the shipped section; undefined where the study gives its own numbers. */
+  readonly section?: string;
 }
 
 export interface BodyChoices {
