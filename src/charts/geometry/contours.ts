@@ -19,7 +19,7 @@ const cellMiddle = 0.5;
  */
 export function isolines(field: GridField, level: number): Point[][] {
   const lines: Point[][] = [];
-  for (const ring of rings(field, level)) lines.push(...openParts(ring, field));
+  for (const ring of rings(field, level)) lines.push(...openParts(ring, field, level));
   return lines;
 }
 
@@ -46,10 +46,10 @@ function rings(field: GridField, level: number): [number, number][][] {
 }
 
 /** Cuts a closed ring where it leaves the grid or runs beside an empty place. */
-function openParts(ring: readonly [number, number][], field: GridField): Point[][] {
+function openParts(ring: readonly [number, number][], field: GridField, level: number): Point[][] {
   const onLine = ring
     .slice(0, -1)
-    .map(([x, y]) => crossesBetweenValues(field, x - cellMiddle, y - cellMiddle));
+    .map(([x, y]) => crossesBetweenValues(field, level, x - cellMiddle, y - cellMiddle));
   const start = onLine.indexOf(false);
   if (start < 0) return [ring.map(([x, y]) => place(field, x, y))];
   const parts: Point[][] = [[]];
@@ -61,10 +61,14 @@ function openParts(ring: readonly [number, number][], field: GridField): Point[]
   return parts.filter((part) => part.length > 1);
 }
 
-function crossesBetweenValues({ xs, ys, values }: GridField, i: number, j: number): boolean {
+function crossesBetweenValues({ xs, ys, values }: GridField, level: number, i: number, j: number): boolean {
   const [i0, i1, j0, j1] = [Math.floor(i), Math.ceil(i), Math.floor(j), Math.ceil(j)];
   if (i0 < 0 || j0 < 0 || i1 >= xs.length || j1 >= ys.length) return false;
-  return !Number.isNaN(values[j0 * xs.length + i0]) && !Number.isNaN(values[j1 * xs.length + i1]);
+  const low = values[j0 * xs.length + i0]!;
+  const high = values[j1 * xs.length + i1]!;
+  // A ring that runs beside an empty place stands on grid points that do not have the level's value.
+  const onGridPoint = i0 === i1 && j0 === j1;
+  return onGridPoint ? low === level : !Number.isNaN(low) && !Number.isNaN(high);
 }
 
 function place(field: GridField, x: number, y: number): Point {

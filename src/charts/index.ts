@@ -1,0 +1,16 @@
+export { type CarpetAxis, type CarpetPlotData, carpetPlot } from './carpet-plot.ts';
+export { type MacRulerData, type MacRulerRow, macRuler } from './mac-ruler.ts';
+export {
+  type AxisMargins,
+  type BandEdges,
+  type MarginAlongAxisData,
+  marginAlongAxis,
+} from './margin-along-axis.ts';
+export { type BuildUp, type NeutralPointBuildUpData, neutralPointBuildUp } from './neutral-point-build-up.ts';
+export { type PlanOutline, type PlanPoint, type PlanViewData, planView } from './plan-view.ts';
+export { type CellAxis, type RegionMapData, regionMap } from './region-map.ts';
+export { type ChartFormat, chartFormats, renderChart } from './render-chart.ts';
+export type { ChartHeading, ChartSpec } from './sheet.ts';
+export { sliceChart } from './slice-chart.ts';
+export type { GridAxis, SliceChartData, SlicePick, SliceRequirement } from './slice-data.ts';
+export { type CgLimit, type TailSizingData, tailSizing } from './tail-sizing.ts';
