@@ -187,7 +187,7 @@ export async function benchResults(): Promise<BenchRow[]> {
   const blocks = realisticBlocks(8);
   const [disk, memory] = [tmpdir(), '/dev/shm'].map((base) => mkdtempSync(join(base, 'aftlimit-bench-')));
   try {
-    return await measure([
+    const measured = await measure([
       csvJob('CSV, own', blocks, 'realistic repeats'),
       csvJob('CSV, own, every value different', [differentBlock()], '30 columns of different doubles'),
       fastCsvJob(blocks[0]),
@@ -203,9 +203,10 @@ export async function benchResults(): Promise<BenchRow[]> {
       assembleJob('joining parts on the memory disk', memory, blocks),
       assembleJob('joining parts on the disk', disk, blocks),
     ]);
+    if (consumed === 0) throw new Error('nothing was written');
+    return measured;
   } finally {
     for (const folder of [disk, memory]) rmSync(folder, { recursive: true, force: true });
-    if (consumed === 0) throw new Error('nothing was written');
   }
 }
 
