@@ -1,6 +1,6 @@
 /** The values of one varied number: a list, or from, to and step or count. Nothing is expanded here. */
 import type { InputDefinition } from './inputs.ts';
-import { clean, type Quantity, type QuantityKind, shortNumber } from './quantities.ts';
+import { clean, inSi, type Quantity, type QuantityKind, shortNumber } from './quantities.ts';
 import type { Reading } from './reading.ts';
 import { firstOf, keySpan, type MapNode, type SourceNode, type Span, valueIn, wordIn } from './source.ts';
 
@@ -240,7 +240,7 @@ function linearValues(from: Quantity, to: Quantity, count: number): Float64Array
   const noise = Math.max(Math.abs(first), Math.abs(end)) * Number.EPSILON;
   for (let i = 0; i < count; i++) {
     const value = last === 0 ? first : (first * (last - i) + end * i) / last;
-    values[i] = (Math.abs(value) <= noise ? 0 : clean(value)) * factor;
+    values[i] = inSi(Math.abs(value) <= noise ? 0 : clean(value), factor);
   }
   return values;
 }

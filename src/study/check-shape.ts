@@ -14,6 +14,7 @@ const tailOrder =
 
 /** Sizes that follow from the given ones must be possible too. */
 export function checkDerivedSizes(choices: Choices, baseline: Baseline, reading: Reading): void {
+  if (baseline.tail['tail.arm'] <= 0) return;
   const derived: [string, number, string][] = [];
   for (const [path, value] of Object.entries(baseline.wing.sizes))
     derived.push([path, value, choices.wing.given[0]!]);
@@ -90,17 +91,21 @@ export function checkVariedShape(
   const axisOf = (path: string) => axes.find((axis) => axis.paths.includes(path));
   checkVariedStations(axes, body, reading);
   checkVariedFractions(axes, choices, reading);
-  checkVariedTail(axisOf('tail.station'), baseline, reading);
+  checkVariedTail(axes, baseline, reading);
   checkVariedCg(axisOf('cg.forward'), axisOf('cg.aft'), choices, baseline, reading);
 }
 
-function checkVariedTail(axis: PlacedAxis | undefined, { wing }: Baseline, reading: Reading): void {
-  if (!axis) return;
-  for (const { span, at } of rowsOf(axis, ['tail.station'])) {
-    if (!(at.get('tail.station')! <= wing.quarterMac)) continue;
-    const found = 'This station of the tail lies ahead of the wing’s quarter-MAC.';
-    reading.faults.add('TAIL_AHEAD_OF_WING', span, found, tailOrder);
-    return;
+function checkVariedTail(axes: readonly PlacedAxis[], { wing }: Baseline, reading: Reading): void {
+  const limits = { 'tail.arm': 0, 'tail.station': wing.quarterMac };
+  for (const [path, limit] of Object.entries(limits)) {
+    const axis = axes.find((one) => one.paths.includes(path));
+    if (!axis) continue;
+    for (const { span, at } of rowsOf(axis, [path])) {
+      if (!(at.get(path)! <= limit)) continue;
+      const found = `With this value of ${path} the tail does not lie aft of the wing’s quarter-MAC.`;
+      reading.faults.add('TAIL_AHEAD_OF_WING', span, found, tailOrder);
+      break;
+    }
   }
 }
 
@@ -162,18 +167,12 @@ function behindMac(value: number, kind: CgKind, { wing }: Baseline): number {
   return kind === 'station' ? value - wing.macLeadingEdge : value;
 }
 
-/** Equal ends are a single loading; less than this apart [share of the MAC] is rounding. */
+/** Equal ends are a single loading; less than this apart [m or share of the MAC] is rounding. */
 const cgTolerance = 1e-9;
 
 function isReversed(forward: number, aft: number, { cg }: Choices, baseline: Baseline): boolean {
-  const [first, last] =
-    cg.forward === cg.aft
-      ? [forward, aft]
-      : [behindMac(forward, cg.forward, baseline), behindMac(aft, cg.aft, baseline)];
-  return (
-    first - last > cgTolerance * baseline.wing.meanAerodynamicChord ||
-    (cg.forward === cg.aft && first - last > cgTolerance)
-  );
+  if (cg.forward === cg.aft) return forward - aft > cgTolerance;
+  return behindMac(forward, cg.forward, baseline) - behindMac(aft, cg.aft, baseline) > cgTolerance;
 }
 
 /** The CG's ends at the fixed values. */

@@ -1,14 +1,12 @@
-/** What stays when a number varies: the pairs of the study, and the exchanges that `hold` asks for. */
-import { showValue } from '../figures/display.ts';
+/** The exchanges of given numbers that `hold` asks for. */
 import type { TailBaseline, WingBaseline } from './baseline.ts';
-import { inputDefinition } from './inputs.ts';
 import { offer } from './nearest-known.ts';
 import { shorten } from './quantities.ts';
 import { tailPairs } from './read-tail.ts';
 import type { HoldRequest, PlacedAxis } from './read-vary.ts';
 import { wingSizes } from './read-wing.ts';
 import type { Reading } from './reading.ts';
-import type { Held, ShowSystem, TailChoices, WingChoices, WingSize } from './study.ts';
+import type { TailChoices, WingChoices, WingSize } from './study.ts';
 import { type Choices, plainPath } from './varied-paths.ts';
 
 type PairName = keyof typeof tailPairs;
@@ -162,63 +160,4 @@ function holdInTail(hold: HoldRequest, exchange: Exchange, baseline: TailBaselin
   const leaves = `tail.${exchange.tail[pair]}`;
   if (path === leaves || !exchangeInput(hold, leaves, path, baseline[path], exchange, reading)) return;
   exchange.tail = { ...exchange.tail, [pair]: path.slice('tail.'.length) };
-}
-
-/** What is held and what follows, for each varied number that is one of several that settle a shape. */
-export function describeHeld(
-  axes: readonly PlacedAxis[],
-  choices: Choices,
-  inputs: ReadonlyMap<string, number>,
-  show: ShowSystem,
-): Held[] {
-  const varied = new Set(axes.flatMap((axis) => axis.paths));
-  const words = (path: string) => {
-    if (varied.has(path)) return `${path} (varied as well)`;
-    const value = inputs.get(path);
-    if (value === undefined) return path;
-    return `${path} (${showValue(value, inputDefinition(path).dimension, show)})`;
-  };
-  return [...varied].flatMap((path) => {
-    const dependants = heldAndFollowing(path, choices);
-    if (!dependants) return [];
-    const held = [
-      ...dependants.held.filter((other) => other !== path).map(words),
-      ...(dependants.also ?? []),
-    ];
-    return [{ varied: path, held, follows: dependants.follows }];
-  });
-}
-
-interface Dependants {
-  readonly held: readonly string[];
-  readonly also?: readonly string[];
-  readonly follows: readonly string[];
-}
-
-function heldAndFollowing(path: string, { wing, tail, cg }: Choices): Dependants | undefined {
-  const tailGiven = tailPairNames.map((name) => `tail.${tail[name]}`);
-  const tailFollows = tailPairNames.map(
-    (name) => `tail.${tailPairs[name].find((key) => key !== tail[name])!}`,
-  );
-  if (path.startsWith('wing.') && shapesWing(path)) {
-    const sizes = wingSizes.filter((size) => !wing.given.includes(size) && size !== path);
-    const ridesWith = [cgWords('forward', cg.forward), cgWords('aft', cg.aft)];
-    return {
-      held: [...wing.given, ...tailGiven],
-      also: ridesWith,
-      follows: [...sizes, 'mean aerodynamic chord', ...tailFollows],
-    };
-  }
-  if (tailGiven.includes(path)) return { held: tailGiven, follows: tailFollows };
-  return undefined;
-}
-
-function shapesWing(path: string): boolean {
-  return !/^wing\.(section|incidence|height|dihedral|washout)|dihedral$/.test(path);
-}
-
-function cgWords(end: 'forward' | 'aft', kind: Choices['cg']['forward']): string {
-  if (kind === 'percent_mac') return `cg.${end} in % MAC (it rides with the wing)`;
-  if (kind === 'station') return `cg.${end} as a station (it stays where it is)`;
-  return `cg.${end} as a distance behind the MAC’s leading edge (it rides with the wing)`;
 }

@@ -290,9 +290,9 @@ const tailRows: Row[] = [
     'l_t',
     'length',
     'Quarter-MAC of the wing to quarter-MAC of the tail, along the datum line.',
-    0.02,
+    -60,
     60,
-    'as for the span',
+    'as for the span; screening needs it above 0',
   ],
   ['tail.station', 'x_t', 'length', 'Station of the tail’s quarter-MAC.', -100, 160, datum],
   [

@@ -66,6 +66,15 @@ export function dimensionWords(dimension: Dimension): string {
 const quantityText = /^([+-]?(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?)\s*(.*)$/s;
 const percent: UnitMeaning = { kind: 'other', factor: 0.01 };
 
+/**
+ * A value in SI. Where the unit is a whole part of the SI unit (mm, g, %) it divides, so that 95 % is
+ * 0.95 to the last bit and not 0.9500000000000001.
+ */
+export function inSi(value: number, factor: number): number {
+  const parts = Math.round(1 / factor);
+  return parts > 1 && 1 / parts === factor ? value / parts : value * factor;
+}
+
 /** At most seven digits, without trailing zeros; for messages. */
 export function shortNumber(value: number): string {
   return String(Number(value.toPrecision(7)));
@@ -90,7 +99,7 @@ export function parseQuantity(text: string, kind: QuantityKind, label: string): 
   const unit = parts[2]!.trim();
   const factor = factorOf(unit, kind.dimension, label, text);
   if (typeof factor !== 'number') return factor;
-  const quantity = { value, factor, unit, si: value * factor };
+  const quantity = { value, factor, unit, si: inSi(value, factor) };
   return rangeFault(quantity, kind, label) ?? quantity;
 }
 

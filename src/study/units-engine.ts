@@ -35,7 +35,7 @@ const si: readonly (readonly [Exclude<UnitKind, 'other'>, string])[] = [
   ['mass', 'kg'],
   ['speed', 'm/s'],
   ['angle', 'rad'],
-  ['per_angle', '1/rad'],
+  ['per_angle', 'rad^-1'],
   ['force', 'N'],
 ];
 const references = si.map(([kind, text]) => [kind, text, math.unit(1, text)] as const);
@@ -47,12 +47,12 @@ function spelling(text: string): string {
     .replace(/²/g, '^2')
     .replace(/³/g, '^3')
     .replace(/·/g, '*')
-    .replace(/^(?:per\s+|1\s*\/\s*|\/\s*)/, '1/')
+    .replace(/^(?:per\s+|1\s*\/\s*|\/\s*)([a-zA-Z]+)$/, '$1^-1')
     .replace(/\b([a-zA-Z]+)([23])\b/g, '$1^$2');
 }
 
 /** Letters, powers, products and quotients: all that a unit needs, so nothing else reaches mathjs. */
-const unitText = /^(?:1\s*\/\s*)?[a-zA-Z][a-zA-Z0-9^*/ -]{0,39}$/;
+const unitText = /^[a-zA-Z][a-zA-Z0-9^*/ -]{0,39}$/;
 
 /** What a unit's text means; undefined for a text that is no unit. */
 export function unitMeaning(text: string): UnitMeaning | undefined {

@@ -1,0 +1,111 @@
+/** What is held and what follows while a number varies, in words for `check` and the summary. */
+import { showValue } from '../figures/display.ts';
+import { inputDefinition } from './inputs.ts';
+import { tailPairs } from './read-tail.ts';
+import { wingSizes } from './read-wing.ts';
+import type { Axis, CgKind, Held, ShowSystem } from './study.ts';
+import type { Choices } from './varied-paths.ts';
+
+interface Dependants {
+  readonly held: readonly string[];
+  /** What else stays or rides along, in words. */
+  readonly also: readonly string[];
+  readonly follows: readonly string[];
+}
+
+/** One entry for each varied number that is one of several that settle a shape. */
+export function describeHeld(
+  axes: readonly Axis[],
+  choices: Choices,
+  inputs: ReadonlyMap<string, number>,
+  show: ShowSystem,
+): Held[] {
+  const varied = new Set(axes.flatMap((axis) => axis.paths));
+  const words = (path: string) => {
+    if (varied.has(path)) return `${path} (varied as well)`;
+    const value = inputs.get(path);
+    if (value === undefined) return path;
+    return `${path} (${showValue(value, inputDefinition(path).dimension, show)})`;
+  };
+  return [...varied].flatMap((path) => {
+    const dependants = dependantsOf(path, choices);
+    if (!dependants) return [];
+    const others = dependants.held.filter((other) => other !== path);
+    return [{ varied: path, held: [...others.map(words), ...dependants.also], follows: dependants.follows }];
+  });
+}
+
+function dependantsOf(path: string, choices: Choices): Dependants | undefined {
+  if (path.startsWith('tail.')) return tailDependants(path, choices);
+  if (/^wing\.(root_leading_edge|(panels\[\d+\]\.)?sweep_)/.test(path)) return placeDependants(choices);
+  if (/^wing\.(area|span|aspect_ratio|root_chord|taper)$/.test(path)) return sizeDependants(path, choices);
+  if (/^wing\.panels\[\d+\]\.(width|span_fraction|taper)$/.test(path)) return sizeDependants(path, choices);
+  return undefined;
+}
+
+const tailGiven = ({ tail }: Choices) => [`tail.${tail.size}`, `tail.${tail.place}`, `tail.${tail.planform}`];
+
+/** The number of a pair that the study does not give. */
+function other(pair: readonly string[], given: string): string {
+  return `tail.${pair.find((key) => key !== given)!}`;
+}
+
+/** What of the tail follows when its size in m² changes, or only its measure against the wing. */
+function tailSizeFollows({ tail }: Choices, areaChanges: boolean): string[] {
+  const size = other(tailPairs.size, tail.size);
+  return areaChanges ? [size, other(tailPairs.planform, tail.planform)] : [size];
+}
+
+function tailDependants(path: string, choices: Choices): Dependants | undefined {
+  const { tail } = choices;
+  const held = tailGiven(choices);
+  const byVolume = tail.size === 'volume';
+  const also: string[] = [];
+  if (path === `tail.${tail.size}`) return { held, also, follows: tailSizeFollows(choices, true) };
+  if (path === `tail.${tail.planform}`)
+    return { held, also, follows: [other(tailPairs.planform, tail.planform)] };
+  if (path !== `tail.${tail.place}`) return undefined;
+  return { held, also, follows: [other(tailPairs.place, tail.place), ...tailSizeFollows(choices, byVolume)] };
+}
+
+/** The wing moves or slides along, and its sizes stay. */
+function placeDependants(choices: Choices): Dependants {
+  const { tail } = choices;
+  const armFollows = ['tail.arm', ...tailSizeFollows(choices, tail.size === 'volume')];
+  return {
+    held: [...choices.wing.given, ...tailGiven(choices)],
+    also: cgWords(choices),
+    follows: [
+      'station of the mean aerodynamic chord',
+      ...(tail.place === 'arm' ? ['tail.station'] : armFollows),
+    ],
+  };
+}
+
+function sizeDependants(path: string, choices: Choices): Dependants {
+  const { wing, tail } = choices;
+  const isSize = (wingSizes as readonly string[]).includes(path);
+  const free = wingSizes.filter((size) => !wing.given.includes(size));
+  // area, span and aspect ratio settle each other: with two of them given the taper moves only the chord
+  const chordOnly =
+    !isSize && wing.given.length === 2 && !wing.given.includes('wing.root_chord') && !path.endsWith('width');
+  return {
+    held: [...wing.given, ...tailGiven(choices)],
+    also: cgWords(choices),
+    follows: [
+      ...(chordOnly ? ['wing.root_chord'] : free),
+      'mean aerodynamic chord',
+      ...tailSizeFollows(choices, tail.size === 'volume'),
+      other(tailPairs.place, tail.place),
+    ],
+  };
+}
+
+function cgWords({ cg }: Choices): string[] {
+  const words = (end: string, kind: CgKind) => {
+    if (kind === 'percent_mac') return `cg.${end} in % MAC (it rides with the wing)`;
+    if (kind === 'station') return `cg.${end} as a station (it stays where it is)`;
+    return `cg.${end} as a distance behind the MAC’s leading edge (it rides with the wing)`;
+  };
+  return [words('forward', cg.forward), words('aft', cg.aft)];
+}

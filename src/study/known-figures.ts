@@ -1,0 +1,35 @@
+import type { Dimension } from '../figures/figure.ts';
+import { figureNameOf } from './inputs.ts';
+import { nearestKnown } from './nearest-known.ts';
+import { shorten } from './quantities.ts';
+import type { Reading } from './reading.ts';
+import type { Span } from './source.ts';
+
+/** A figure that a requirement, a preference or the table can name. */
+export interface KnownFigure {
+  readonly name: string;
+  readonly dimension: Dimension;
+}
+
+/** The figures of one study by name; a dotted path is taken for the name it stands for. */
+export class FigureNames {
+  readonly #byName: ReadonlyMap<string, KnownFigure>;
+
+  constructor(figures: readonly KnownFigure[]) {
+    this.#byName = new Map(figures.map((figure) => [figure.name, figure]));
+  }
+
+  /** The figure of that name; where there is none a fault is told. */
+  find(word: string, span: Span, reading: Reading): KnownFigure | undefined {
+    const found = this.#byName.get(figureNameOf(word.trim()));
+    if (found) return found;
+    const near = nearestKnown(figureNameOf(word.trim()), this.#byName.keys());
+    reading.faults.add(
+      'UNKNOWN_FIGURE',
+      span,
+      `This study has no figure '${shorten(word)}'.`,
+      near ? `Did you mean '${near}'?` : 'List the figures of the study with: aftlimit figures.',
+    );
+    return undefined;
+  }
+}
