@@ -1,8 +1,7 @@
 /** Lift-curve slope of wings and tails. Per rad, referred to the surface's own area. */
-import { sweepTangentAt } from './planform.ts';
+import { quarterChord, sweepTangentAt } from './planform.ts';
 import { tableLiftSlope, wingTableRange } from './wing-table.ts';
 
-const quarterChord = 0.25;
 const halfChord = 0.5;
 
 /**

@@ -5,6 +5,7 @@
  * h_n = (a_w h_w + a_ts h_t)/C_Lα − C_mα,body/C_Lα, exact for linear parts, is built up as
  * h_w + tail step + body step + vertical step, which add up to it exactly.
  */
+import { quarterChord } from './planform.ts';
 
 /**
  * The tail's share of the lift slope, η a_t (S_t/S)(1 − ε_α) [1/rad].
@@ -42,7 +43,6 @@ export function tailPosition(
   tailMac: number,
   tailAerodynamicCentre: number,
 ): number {
-  const quarterChord = 0.25;
   return quarterChord + (arm + (tailAerodynamicCentre - quarterChord) * tailMac) / meanAerodynamicChord;
 }
 

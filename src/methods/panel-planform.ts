@@ -3,6 +3,7 @@
  * and square tips. Arrays hold one number a panel; panel i joins the tip of panel i−1, so chords and
  * edges are continuous. Lengths in m, areas in m², slopes as tangents.
  */
+import { quarterChord } from './planform.ts';
 
 /**
  * Where `panelPlanform` puts each figure in its `out` array. Whole-wing figures (both halves);
@@ -136,7 +137,6 @@ export function panelLeadingEdgeTangent(
   taper: number,
   width: number,
 ): number {
-  const quarterChord = 0.25;
   return quarterChordTangent + (quarterChord * innerChord * (1 - taper)) / width;
 }
 
@@ -172,7 +172,6 @@ export function equivalentSweepTangent(
   spanwiseStationOfMac: number,
   rootChord: number,
 ): number {
-  const quarterChord = 0.25;
   const rise = leadingEdgeOfMac + quarterChord * (meanAerodynamicChord - rootChord);
   return rise / spanwiseStationOfMac;
 }

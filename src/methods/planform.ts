@@ -6,6 +6,9 @@
  * Symbols: S area, b span, A aspect ratio, c_r root chord, λ taper (tip chord / root chord).
  */
 
+/** Chord fraction of the quarter-chord line, to which sweep, arms and heights refer [-]. */
+export const quarterChord = 0.25;
+
 /** Root chord c_r = 2S / (b(1+λ)) [m] from area [m²], span [m] and taper [-]. Exact. */
 export function rootChordFromArea(area: number, span: number, taper: number): number {
   return (2 * area) / (span * (1 + taper));
