@@ -1,10 +1,10 @@
-import { inside, isClear, textSpots } from './geometry/line-labels.ts';
-import { type Spot, simplify } from './geometry/polyline.ts';
+import { placeAtEnds } from './geometry/end-labels.ts';
+import { type Spot, spotsAlong } from './geometry/polyline.ts';
 import { keyRow } from './key-row.ts';
 import { type Label, type Layer, labels, type Position, polylines } from './marks.ts';
 import { type PixelMap, panel, pixelMap, type Scale } from './panel.ts';
 import { type ChartHeading, type ChartSpec, sheet } from './sheet.ts';
-import { cleanText, ellipsize, textWidth } from './text-width.ts';
+import { cleanText, ellipsize } from './text-width.ts';
 import { colours, textSize, weight } from './theme.ts';
 
 /** One of the two varied numbers of a carpet. */
@@ -25,8 +25,9 @@ export interface CarpetPlotData {
 }
 
 const plot = { width: 600, height: 430 } as const;
-/** Widths of the two shifts of x; unequal, so that the carpet opens even where the figure grows alike with both. */
-const shift = { a: 1, b: 0.55 } as const;
+/** Shift of x over the whole of the first number; the shifts of the second to choose from. */
+const shiftOfA = 1;
+const shiftsOfB = [0.55, -0.55, 0.35, -0.35, 0.8, -0.8] as const;
 const mostLines = 13;
 const lineStyles = {
   a: { color: colours.accent, width: 1.8 },
@@ -38,11 +39,12 @@ const lineStyles = {
  * other one. Across there is no scale: the numbers stand at the ends of the lines.
  */
 export function carpetPlot(data: CarpetPlotData): ChartSpec {
-  const scales = { x: shiftScale(), y: figureScale(data) };
+  const shiftOfB = widestOpening(data);
+  const scales = { x: shiftScale(shiftOfB), y: figureScale(data) };
   const map = pixelMap(plot.width, plot.height, scales.x, scales.y);
   const drawn = { a: everySome(data.a.labels.length), b: everySome(data.b.labels.length) };
-  const families = { a: family(data, 'a', drawn.a), b: family(data, 'b', drawn.b) };
-  const ends = placeEnds(data, families, map);
+  const families = { a: family(data, 'a', drawn.a, shiftOfB), b: family(data, 'b', drawn.b, shiftOfB) };
+  const ends = placeNumbers(data, families, map);
   const layers: Layer[] = [
     polylines(
       families.b.flatMap(({ runs }) => runs),
@@ -79,13 +81,22 @@ function everySome(count: number): number[] {
   return Array.from({ length: lines }, (_, k) => Math.round((k * (count - 1)) / Math.max(1, lines - 1)));
 }
 
+interface Families {
+  readonly a: readonly CarpetLine[];
+  readonly b: readonly CarpetLine[];
+}
 interface CarpetLine {
   readonly index: number;
   readonly runs: readonly Position[][];
 }
 
 /** The lines of one constant number; each runs over all values of the other. */
-function family(data: CarpetPlotData, constant: 'a' | 'b', indices: readonly number[]): CarpetLine[] {
+function family(
+  data: CarpetPlotData,
+  constant: 'a' | 'b',
+  indices: readonly number[],
+  shiftOfB: number,
+): CarpetLine[] {
   const [na, nb] = [data.a.labels.length, data.b.labels.length];
   const length = constant === 'a' ? nb : na;
   return indices.map((index) => {
@@ -93,7 +104,7 @@ function family(data: CarpetPlotData, constant: 'a' | 'b', indices: readonly num
     for (let k = 0; k < length; k++) {
       const [ia, ib] = constant === 'a' ? [index, k] : [k, index];
       const y = data.values[ia * nb + ib]!;
-      if (Number.isFinite(y)) runs.at(-1)!.push({ x: carpetShift(ia, na, ib, nb), y });
+      if (Number.isFinite(y)) runs.at(-1)!.push({ x: carpetShift(ia, na, ib, nb, shiftOfB), y });
       else runs.push([]);
     }
     return { index, runs: runs.filter((run) => run.length > 1) };
@@ -101,13 +112,41 @@ function family(data: CarpetPlotData, constant: 'a' | 'b', indices: readonly num
 }
 
 /** Sideways place of a pair of values, 0 at the first of both. */
-export function carpetShift(ia: number, na: number, ib: number, nb: number): number {
-  return (shift.a * ia) / Math.max(1, na - 1) + (shift.b * ib) / Math.max(1, nb - 1);
+export function carpetShift(ia: number, na: number, ib: number, nb: number, shiftOfB: number): number {
+  return (shiftOfA * ia) / Math.max(1, na - 1) + (shiftOfB * ib) / Math.max(1, nb - 1);
 }
 
-function shiftScale(): Scale {
-  const room = 0.16;
-  return { from: -room, to: shift.a + shift.b + room, axis: null };
+/**
+ * The shift of the second number that opens the carpet widest, so that lines do not fall on one
+ * another where the figure grows alike with both: the area of all its meshes against the plot's.
+ */
+export function widestOpening(data: CarpetPlotData): number {
+  const opening = (shiftOfB: number) => meshArea(data, shiftOfB) / (shiftOfA + Math.abs(shiftOfB));
+  return shiftsOfB.reduce<number>(
+    (best, each) => (opening(each) > opening(best) * (1 + 1e-9) ? each : best),
+    shiftsOfB[0],
+  );
+}
+
+function meshArea({ a, b, values }: CarpetPlotData, shiftOfB: number): number {
+  const [na, nb] = [a.labels.length, b.labels.length];
+  const [stepA, stepB] = [shiftOfA / Math.max(1, na - 1), shiftOfB / Math.max(1, nb - 1)];
+  let area = 0;
+  for (let ia = 0; ia + 1 < na; ia++) {
+    for (let ib = 0; ib + 1 < nb; ib++) {
+      const here = values[ia * nb + ib]!;
+      const mesh = stepA * (values[ia * nb + ib + 1]! - here) - stepB * (values[(ia + 1) * nb + ib]! - here);
+      if (Number.isFinite(mesh)) area += Math.abs(mesh);
+    }
+  }
+  return area;
+}
+
+const sideRoom = 0.14;
+function shiftScale(shiftOfB: number): Scale {
+  const [from, to] = [Math.min(0, shiftOfB), shiftOfA + Math.max(0, shiftOfB)];
+  const room = (to - from) * sideRoom;
+  return { from: from - room, to: to + room, axis: null };
 }
 
 function figureScale({ values, figureTitle }: CarpetPlotData): Scale {
@@ -122,61 +161,25 @@ function figureScale({ values, figureTitle }: CarpetPlotData): Scale {
   };
 }
 
-const endGap = 6;
-const longestName = 200;
+const longestName = 150;
+const lineSpot = { every: 4, radius: 1.5 } as const;
 
-/** Numbers at the ends of the lines, the axis' name at one of them; those that would touch are left out. */
-function placeEnds(
-  data: CarpetPlotData,
-  families: { a: CarpetLine[]; b: CarpetLine[] },
-  map: PixelMap,
-): { a: Label[]; b: Label[] } {
-  const taken: Spot[] = [];
-  const frame = { width: plot.width, height: plot.height };
-  const put = (lines: readonly CarpetLine[], axis: CarpetAxis, atStart: boolean): Label[] => {
-    const name = ellipsize(axis.title, longestName, textSize.small);
-    const placed: Label[] = [];
-    const middle = Math.floor(lines.length / 2);
-    // The ends of the family first: they tell its range.
-    const order = [...lines.keys()].sort((i, j) => rank(i, lines.length) - rank(j, lines.length) || i - j);
-    for (const position of order) {
-      const line = lines[position]!;
-      const run = atStart ? line.runs[0] : line.runs.at(-1);
-      if (run === undefined) continue;
-      const text = ellipsize(axis.labels[line.index]!, longestName, textSize.small);
-      for (const candidate of position === middle ? [`${name}: ${text}`, text] : [text]) {
-        const at = beyondEnd(run.map(map.toPixels), atStart, candidate);
-        const spots = textSpots(
-          at.x,
-          at.y,
-          0,
-          textWidth(candidate, textSize.small, weight.strong),
-          textSize.small,
-        );
-        if (!spots.every((spot) => inside(spot, frame) && isClear(spot, taken))) continue;
-        taken.push(...spots);
-        placed.push({ ...map.fromPixels(at), text: candidate });
-        break;
-      }
-    }
-    return placed;
+/** Numbers at the ends of both families of lines, each with its axis' name where that finds room. */
+function placeNumbers(data: CarpetPlotData, families: Families, map: PixelMap): { a: Label[]; b: Label[] } {
+  const runs = [...families.a, ...families.b].flatMap((line) =>
+    line.runs.map((run) => run.map(map.toPixels)),
+  );
+  const clear = runs.flatMap((run) => spotsAlong(run, lineSpot.every, lineSpot.radius));
+  const numbers = (lines: readonly CarpetLine[], axis: CarpetAxis, keepClear: readonly Spot[]) => {
+    const numbered = lines.map(({ index, runs: own }) => ({
+      line: own.flat().map(map.toPixels),
+      text: ellipsize(axis.labels[index]!, longestName, textSize.small),
+    }));
+    return placeAtEnds(numbered, ellipsize(axis.title, longestName, textSize.small), keepClear, plot);
   };
-  const a = put(families.a, data.a, false);
-  return { a, b: put(families.b, data.b, true) };
-}
-
-function rank(position: number, count: number): number {
-  if (position === 0 || position === count - 1) return 0;
-  return position === Math.floor(count / 2) ? 1 : 2;
-}
-
-/** Middle of a text that follows a line beyond its end, clear of it whatever the line's direction. */
-function beyondEnd(line: readonly Position[], atStart: boolean, text: string): Position {
-  const straight = simplify(line, 0.5);
-  const end = atStart ? straight[0]! : straight.at(-1)!;
-  const before = atStart ? straight[1]! : straight.at(-2)!;
-  const length = Math.hypot(end.x - before.x, end.y - before.y) || 1;
-  const [ux, uy] = [(end.x - before.x) / length, (end.y - before.y) / length];
-  const half = textWidth(text, textSize.small, weight.strong) / 2;
-  return { x: end.x + Math.sign(ux) * (half + endGap), y: end.y + uy * (endGap + textSize.small / 2) };
+  const a = numbers(families.a, data.a, clear);
+  const b = numbers(families.b, data.b, [...clear, ...a.spots]);
+  const inScales = (placed: readonly Label[]) =>
+    placed.map(({ x, y, text }) => ({ ...map.fromPixels({ x, y }), text }));
+  return { a: inScales(a.labels), b: inScales(b.labels) };
 }

@@ -101,16 +101,22 @@ function rowLayers(row: MacRulerRow, top: number, x: Scale): Layer[] {
   const inset = 2;
   return [
     bars([{ x: 0, x2: 100, ...strip }], { fill: colours.wash, stroke: colours.rule }),
-    segments([{ x: quarterMac, x2: quarterMac, y: strip.y - 4, y2: strip.y2 + 4 }], quarterLine),
-    bars([{ x: row.cg.forward, x2: row.cg.aft, y: strip.y + inset, y2: strip.y2 - inset }], {
-      fill: colours.accent,
-    }),
+    segments([{ x: quarterMac, x2: quarterMac, y: strip.y - 1, y2: strip.y2 + 1 }], quarterLine),
+    bars([{ ...cgBar(row, x), y: strip.y + inset, y2: strip.y2 - inset }], { fill: colours.accent }),
     points(known([{ x: row.aerodynamicCentre, y: strip.y2 + 2 }]), centreMark),
     points(known([{ x: row.neutralPoint, y: middle }]), neutralPointMark),
     ...windowLayers(row, top, x),
     ...nameLayers(row, top, x),
     labels(belowLabels(row, top + lane.below, x), { size: textSize.small, baseline: 'top' }),
   ];
+}
+
+const thinnestBar = 3;
+/** The CG range, never thinner than can be seen. */
+function cgBar({ cg }: MacRulerRow, x: Scale): { x: number; x2: number } {
+  const thin = (thinnestBar / 2 / width) * (x.to - x.from);
+  const middle = (cg.forward + cg.aft) / 2;
+  return { x: Math.min(cg.forward, middle - thin), x2: Math.max(cg.aft, middle + thin) };
 }
 
 function known(positions: readonly { x: number; y: number }[]) {
@@ -159,7 +165,7 @@ function windowLayers({ window }: MacRulerRow, top: number, x: Scale): Layer[] {
   const rows: Segment[] = [{ x: start, x2: end, y, y2: y }];
   if (from !== undefined) rows.push({ x: from, x2: from, y, y2: foot });
   if (to !== undefined) rows.push({ x: to, x2: to, y, y2: foot });
-  const text = `window ${from === undefined ? 'up to ' : `${numberText(from, 1)}–`}${to === undefined ? 'and aft' : numberText(to, 1)} %`;
+  const text = `window ${windowText(window)}`;
   const perPixel = (x.to - x.from) / width;
   const roomRight = (x.to - end) / perPixel;
   const right = roomRight > textWidth(text, textSize.small) + 8;
@@ -174,11 +180,21 @@ function windowLayers({ window }: MacRulerRow, top: number, x: Scale): Layer[] {
   ];
 }
 
+function windowText({ from, to }: MacRulerRow['window']): string {
+  if (from === undefined) return `up to ${numberText(to!, 1)} %`;
+  return to === undefined ? `from ${numberText(from, 1)} % aft` : rangeText(from, to);
+}
+
+/** A dash between numbers would hide in minus signs. */
+function rangeText(from: number, to: number): string {
+  return `${numberText(from, 1)}${from < 0 || to < 0 ? ' to ' : '–'}${numberText(to, 1)} %`;
+}
+
 /** CG range, neutral point and aerodynamic centre in numbers under their marks, moved apart where they would touch. */
 function belowLabels({ cg, neutralPoint, aerodynamicCentre }: MacRulerRow, y: number, x: Scale): Label[] {
   const wanted = [
     { at: aerodynamicCentre, text: `a.c. ${numberText(aerodynamicCentre, 1)} %` },
-    { at: (cg.forward + cg.aft) / 2, text: `CG ${numberText(cg.forward, 1)}–${numberText(cg.aft, 1)} %` },
+    { at: (cg.forward + cg.aft) / 2, text: `CG ${rangeText(cg.forward, cg.aft)}` },
     { at: neutralPoint, text: `n.p. ${numberText(neutralPoint, 1)} %` },
   ].filter(({ at }) => Number.isFinite(at));
   const perPixel = (x.to - x.from) / width;

@@ -12,7 +12,7 @@ import {
 } from './marks.ts';
 import { type Panel, panel, type Scale } from './panel.ts';
 import { type ChartHeading, type ChartSpec, grid, sheet } from './sheet.ts';
-import { cleanText, ellipsize, numberText, textWidth, wrapText } from './text-width.ts';
+import { ellipsize, numberText, textWidth, wrapText } from './text-width.ts';
 import { colours, textSize, weight } from './theme.ts';
 
 /** Margins along one varied axis. All lists run with the axis' values; NaN: not computed. */
@@ -41,8 +41,12 @@ export interface MarginAlongAxisData {
   readonly axes: readonly AxisMargins[];
 }
 
-const plot = { width: 264, height: 190 } as const;
-const mostColumns = 3;
+const plotWidths = [480, 350, 264] as const;
+const plotHeights = [300, 230, 190] as const;
+interface PlotSize {
+  readonly width: number;
+  readonly height: number;
+}
 const aftPoint = { shape: 'circle', size: 34, fill: colours.accent, width: 1 } as const;
 const forwardPoint = {
   shape: 'diamond',
@@ -58,9 +62,10 @@ const forwardEdge = { color: colours.rule, width: 1, dash: [5, 3] } as const;
 
 /** Small multiples: margin at aft and forward CG along each axis through the baseline, with the envelope of all combinations. */
 export function marginAlongAxis(data: MarginAlongAxisData): ChartSpec {
-  const columns = Math.min(mostColumns, data.axes.length);
+  const columns = Math.min(plotWidths.length, data.axes.length);
+  const plot = { width: plotWidths[columns - 1]!, height: plotHeights[columns - 1]! };
   const y = marginScale(data);
-  const panels = data.axes.map((axis, index) => axisPanel(axis, data.band, y, index % columns === 0));
+  const panels = data.axes.map((axis, index) => axisPanel(axis, data.band, y, plot, index % columns === 0));
   const width = Math.max(columns * (plot.width + 90), 560);
   return sheet(
     data.heading,
@@ -101,14 +106,14 @@ function marginScale({ axes, band }: MarginAlongAxisData): Scale {
   };
 }
 
-function axisPanel(axis: AxisMargins, band: BandEdges, y: Scale, first: boolean): Panel {
-  const { places, x } = axisPlaces(axis);
+function axisPanel(axis: AxisMargins, band: BandEdges, y: Scale, plot: PlotSize, first: boolean): Panel {
+  const { places, x } = axisPlaces(axis, plot.width);
   const at = (list: ArrayLike<number>): Position[] =>
     places.map((place, index) => ({ x: place, y: list[index]! }));
   const layers: Layer[] = [
     polygons(envelope(places, axis.aftRange), { fill: colours.accentTint }),
     polylines(outline(places, axis.forwardRange), forwardEdge),
-    ...bandEdges(band, x, y),
+    ...bandEdges(band, x, y, plot.height),
     polylines(unbroken(at(axis.forward)), forwardLine),
     polylines(unbroken(at(axis.aft)), aftLine),
     points(at(axis.forward).filter(isKnown), forwardPoint),
@@ -125,7 +130,7 @@ function axisPanel(axis: AxisMargins, band: BandEdges, y: Scale, first: boolean)
 }
 
 /** Numbers stand at their value, texts one after another. */
-function axisPlaces({ values }: AxisMargins): { places: number[]; x: Scale } {
+function axisPlaces({ values }: AxisMargins, width: number): { places: number[]; x: Scale } {
   const numbers = values.filter((value): value is number => typeof value === 'number');
   if (numbers.length === values.length) {
     const [from, to] = [Math.min(...numbers), Math.max(...numbers)];
@@ -138,15 +143,19 @@ function axisPlaces({ values }: AxisMargins): { places: number[]; x: Scale } {
   const places = values.map((_, index) => index);
   return {
     places,
-    x: { from: -0.4, to: values.length - 0.6, axis: { title: null, more: textTicks(values.map(String)) } },
+    x: {
+      from: -0.4,
+      to: values.length - 0.6,
+      axis: { title: null, more: textTicks(values.map(String), width) },
+    },
   };
 }
 
 const longestTick = 110;
-function textTicks(texts: readonly string[]) {
+function textTicks(texts: readonly string[], width: number) {
   const shown = texts.map((text) => ellipsize(text, longestTick, textSize.axis));
   const widest = Math.max(...shown.map((text) => textWidth(text, textSize.axis)));
-  const step = plot.width / texts.length;
+  const step = width / texts.length;
   const turned = widest + 8 > step;
   const every = turned ? Math.ceil(14 / step) : 1;
   return {
@@ -185,10 +194,10 @@ function outline(places: readonly number[], { least, greatest }: AxisMargins['fo
 }
 
 /** Rules at the band's edges; their numbers stand beside the plot, moved apart where they would touch. */
-function bandEdges(band: BandEdges, x: Scale, y: Scale): Layer[] {
+function bandEdges(band: BandEdges, x: Scale, y: Scale, height: number): Layer[] {
   const edges = [band.lower, band.upper].filter((edge): edge is number => edge !== undefined);
   const rules: Segment[] = edges.map((edge) => ({ x: x.from, x2: x.to, y: edge, y2: edge }));
-  const perPixel = (y.to - y.from) / plot.height;
+  const perPixel = (y.to - y.from) / height;
   const middles = spread(
     edges.map((at) => ({ at, size: textSize.small * perPixel * 1.2 })),
     y.from,
@@ -200,9 +209,4 @@ function bandEdges(band: BandEdges, x: Scale, y: Scale): Layer[] {
     text: `${numberText(edge, Number.isInteger(edge) ? 0 : 1)} %`,
   }));
   return [segments(rules, edgeLine), labels(texts, { size: textSize.small, align: 'left', dx: 5 })];
-}
-
-/** For charts that print an axis' name alone. */
-export function axisName(title: string): string {
-  return cleanText(title.replace(/\s*\[[^\]]*\]$/u, ''));
 }

@@ -1,7 +1,7 @@
 import { bars, type Label, type Layer, labels, type Segment, segments } from './marks.ts';
 import { type Panel, panel, type Scale } from './panel.ts';
 import { type ChartHeading, type ChartSpec, grid, sheet } from './sheet.ts';
-import { ellipsize, numberText, textWidth, wrapText } from './text-width.ts';
+import { ellipsize, numberText, wrapText } from './text-width.ts';
 import { colours, textSize, weight } from './theme.ts';
 
 /** How one combination's neutral point comes about; all in % MAC. */
@@ -18,18 +18,18 @@ export interface NeutralPointBuildUpData {
   readonly combinations: readonly BuildUp[];
 }
 
-const plotWidth = 250;
+const plotWidths = [420, 330, 250] as const;
 const step = 22;
 const barHeight = 13;
-const mostColumns = 3;
 const textRoom = 44;
 
 /** Stepped bars from the wing's own place to the neutral point, values printed. */
 export function neutralPointBuildUp(data: NeutralPointBuildUpData): ChartSpec {
-  const columns = Math.min(mostColumns, data.combinations.length);
-  const x = positionScale(data.combinations);
+  const columns = Math.min(plotWidths.length, data.combinations.length);
+  const plotWidth = plotWidths[columns - 1]!;
+  const x = positionScale(data.combinations, plotWidth);
   const panels = data.combinations.map((combination, index) =>
-    buildUpPanel(combination, x, index % columns === 0),
+    buildUpPanel(combination, x, plotWidth, index % columns === 0),
   );
   const width = Math.max(columns * (plotWidth + 30) + 80, 560);
   return sheet(
@@ -54,8 +54,9 @@ export function stackedBars({ steps, neutralPoint }: BuildUp): Bar[] {
   const stacked = steps.map(({ name, change }, index) => {
     const from = reached;
     reached += change;
-    const sign = index > 0 && change > 0 ? '+' : '';
-    return { name, from, to: reached, text: sign + numberText(change, 1), total: false };
+    const text = numberText(change, 1);
+    const sign = index > 0 && Number(text) > 0 ? '+' : '';
+    return { name, from, to: reached, text: sign + text, total: false };
   });
   return [
     ...stacked,
@@ -63,7 +64,7 @@ export function stackedBars({ steps, neutralPoint }: BuildUp): Bar[] {
   ];
 }
 
-function positionScale(combinations: readonly BuildUp[]): Scale {
+function positionScale(combinations: readonly BuildUp[], plotWidth: number): Scale {
   const ends = combinations
     .flatMap((combination) => stackedBars(combination).flatMap(({ from, to }) => [from, to]))
     .filter(Number.isFinite);
@@ -77,7 +78,7 @@ function positionScale(combinations: readonly BuildUp[]): Scale {
   };
 }
 
-function buildUpPanel(combination: BuildUp, x: Scale, first: boolean): Panel {
+function buildUpPanel(combination: BuildUp, x: Scale, plotWidth: number, first: boolean): Panel {
   const all = stackedBars(combination).filter(({ from, to }) => Number.isFinite(from) && Number.isFinite(to));
   const top = (index: number) => index * step + (step - barHeight) / 2;
   const rows = (total: boolean): Segment[] =>
@@ -118,7 +119,7 @@ function valueLabels(all: readonly Bar[], top: (index: number) => number, forwar
   );
 }
 
-const longestName = 130;
+const longestName = 150;
 function nameLabels(all: readonly Bar[], x: Scale): Layer {
   const rows = all.map(({ name }, index) => ({
     x: x.from,
@@ -126,10 +127,4 @@ function nameLabels(all: readonly Bar[], x: Scale): Layer {
     text: ellipsize(name, longestName, textSize.axis),
   }));
   return labels(rows, { size: textSize.axis, align: 'right', dx: -8 });
-}
-
-/** Width of the widest printed name [px]; the layout leaves room for it. */
-export function widestName(combinations: readonly BuildUp[]): number {
-  const names = combinations.flatMap(({ steps }) => steps.map(({ name }) => name));
-  return Math.min(longestName, Math.max(0, ...names.map((name) => textWidth(name, textSize.axis))));
 }

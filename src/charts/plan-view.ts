@@ -1,5 +1,5 @@
 import { type KeyItem, keyRow } from './key-row.ts';
-import { bars, type Layer, labels, type Position, points, polygons, polylines, segments } from './marks.ts';
+import { bars, type Layer, type Position, points, polygons, polylines, segments } from './marks.ts';
 import { type Panel, panel, type Scale } from './panel.ts';
 import { type ChartHeading, type ChartSpec, grid, sheet } from './sheet.ts';
 import { ellipsize, wrapText } from './text-width.ts';
@@ -36,9 +36,12 @@ export interface PlanViewData {
   readonly outlines: readonly PlanOutline[];
 }
 
-const mostColumns = 3;
-const largest = { width: 300, height: 300 } as const;
-const alone = { width: 560, height: 480 } as const;
+/** Room for one plan [px] in sheets of one, two and three columns. */
+const rooms = [
+  { width: 560, height: 480 },
+  { width: 420, height: 380 },
+  { width: 300, height: 300 },
+] as const;
 const margin = 0.06;
 const neutralPointMark = { shape: 'diamond', size: 62, fill: colours.ink, width: 1 } as const;
 const centreMark = {
@@ -52,8 +55,8 @@ const macLine = { color: colours.accent, width: 2.2 } as const;
 
 /** Plans of the shortlisted wings and tails, nose up, all to one scale, the same across and along. */
 export function planView(data: PlanViewData): ChartSpec {
-  const columns = Math.min(mostColumns, data.outlines.length);
-  const frame = planFrame(data.outlines, data.outlines.length === 1 ? alone : largest);
+  const columns = Math.min(rooms.length, data.outlines.length);
+  const frame = planFrame(data.outlines, rooms[columns - 1]!);
   const panels = data.outlines.map((outline) => planPanel(outline, frame));
   const width = Math.max(columns * (frame.width + 26), 560);
   return sheet(
@@ -124,13 +127,7 @@ function planPanel(outline: PlanOutline, frame: PlanFrame): Panel {
     ),
     bars([{ x: -half, x2: half, y: cg.forward, y2: cg.aft }], { fill: colours.accent }),
     points(known(mac.aside, outline.aerodynamicCentre), centreMark),
-    points(known(0, outline.neutralPoint), neutralPointMark),
-    labels([{ x: mac.aside, y: mac.leadingEdge, text: 'MAC' }], {
-      size: textSize.small,
-      baseline: 'bottom',
-      dy: -4,
-      color: colours.accentDark,
-    }),
+    ...neutralPointLayers(outline.neutralPoint, frame.perUnit),
   ];
   return panel({
     width: frame.width,
@@ -141,6 +138,17 @@ function planPanel(outline: PlanOutline, frame: PlanFrame): Panel {
     title: [ellipsize(outline.label, frame.width, textSize.panel, weight.strong)],
     subtitle: wrapText(outline.detail, frame.width, textSize.small, 2),
   });
+}
+
+const leader = 11;
+/** The neutral point as a line out from the centreline to its mark: a mark on the centreline would hide the CG range. */
+function neutralPointLayers(station: number, perUnit: number): Layer[] {
+  if (!Number.isFinite(station)) return [];
+  const reach = leader / perUnit;
+  return [
+    segments([{ x: -reach, x2: reach / 2, y: station, y2: station }], { color: colours.ink, width: 1 }),
+    points(known(-reach, station), neutralPointMark),
+  ];
 }
 
 function known(x: number, y: number): Position[] {

@@ -1,7 +1,7 @@
 import { fieldAt, type GridField, isolines } from './geometry/contours.ts';
 import { hatchTicks } from './geometry/hatch.ts';
 import { type LineLabel, placeOnLines } from './geometry/line-labels.ts';
-import { arcLengths, cutOut, type Point, type Polyline, pointAlong, type Spot } from './geometry/polyline.ts';
+import { cutOut, type Point, type Polyline, type Spot, spotsAlong } from './geometry/polyline.ts';
 import { type Layer, type LineStyle, polylines, type Segment, segments } from './marks.ts';
 import type { PixelMap } from './panel.ts';
 import {
@@ -76,14 +76,7 @@ export function failingSide(slackField: GridField, map: PixelMap) {
 
 /** Room that an edge and its hatch take. */
 export function edgeSpots({ lines }: Edge): Spot[] {
-  return lines.flatMap((line) => {
-    const lengths = arcLengths(line);
-    const count = Math.ceil(lengths.at(-1)! / tick.length);
-    return Array.from({ length: count + 1 }, (_, k) => {
-      const { x, y } = pointAlong(line, lengths, k * tick.length);
-      return { x, y, radius: tick.length };
-    });
-  });
+  return lines.flatMap((line) => spotsAlong(line, tick.length, tick.length));
 }
 
 /** The edge's letter, on its own line and clear of the other edges. */

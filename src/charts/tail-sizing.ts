@@ -1,6 +1,6 @@
 import { hatchTicks } from './geometry/hatch.ts';
 import { type LineLabel, placeOnLines } from './geometry/line-labels.ts';
-import { arcLengths, cutOut, type Point, pointAlong, type Spot } from './geometry/polyline.ts';
+import { cutOut, type Point, type Spot, spotsAlong } from './geometry/polyline.ts';
 import { type KeyItem, keyRow } from './key-row.ts';
 import { bars, type Layer, labels, points, polylines, segments } from './marks.ts';
 import { type PixelMap, panel, pixelMap, type Scale } from './panel.ts';
@@ -79,11 +79,15 @@ export function tailSizing(data: TailSizingData): ChartSpec {
 
 function fitInWords(data: TailSizingData, fit: number | null): string {
   const { forward, aft } = data.loading;
-  const range = `CG from ${numberText(forward, 1)} to ${numberText(aft, 1)} % MAC`;
+  const range = `CG range ${numberText(forward, 1)} to ${numberText(aft, 1)} % MAC`;
   const name = cleanText(data.sizeTitle);
   const size = (value: number) => numberText(value, data.sizeDecimals);
-  if (fit !== null) return `${range} fits from ${name} ${size(fit)} up (smallest of those drawn)`;
-  return `${range} fits at no ${name} between ${size(data.sizes[0]!)} and ${size(data.sizes.at(-1)!)}`;
+  const [least, greatest] = [data.sizes[0]!, data.sizes.at(-1)!];
+  if (fit === null)
+    return `${range}: it fits at no tail drawn here (${name} ${size(least)} to ${size(greatest)})`;
+  if (fit === least)
+    return `${range}: it fits at the smallest tail drawn here (${name} ${size(least)}); a smaller one may do`;
+  return `${range}: the smallest tail that fits it is ${name} ${size(fit)}`;
 }
 
 /**
@@ -119,7 +123,7 @@ function cgScale({ limits, loading }: TailSizingData): Scale {
   return {
     from: least - room,
     to: greatest + room,
-    axis: { title: '← forward    CG [% MAC]    aft →', more: { tickCount: 9 } },
+    axis: { title: '← forward · CG [% MAC] · aft →', more: { tickCount: 9 } },
   };
 }
 
@@ -163,26 +167,15 @@ function placeLimitLabels(
 
 /** Room that a line and its hatch take. */
 function lineSpots(line: readonly Point[]): Spot[] {
-  if (line.length < 2) return [];
-  const lengths = arcLengths(line);
-  const radius = tick.length;
-  return Array.from({ length: Math.ceil(lengths.at(-1)! / radius) + 1 }, (_, k) => {
-    const { x, y } = pointAlong(line, lengths, k * radius);
-    return { x, y, radius };
-  });
+  return spotsAlong(line, tick.length, tick.length);
 }
 
+const rangeRoom = 20;
 /** Room that a loading range and its text take. */
 function rangeSpots({ loading }: TailSizingData, size: number, map: PixelMap): Spot[] {
   const from = map.toPixels({ x: loading.forward, y: size });
   const to = map.toPixels({ x: loading.aft, y: size });
-  const radius = 20;
-  const count = Math.max(1, Math.ceil((to.x - from.x) / radius));
-  return Array.from({ length: count + 1 }, (_, k) => ({
-    x: from.x + (k / count) * (to.x - from.x),
-    y: from.y,
-    radius,
-  }));
+  return spotsAlong([from, to], rangeRoom, rangeRoom);
 }
 
 function styleOf(index: number) {
@@ -204,11 +197,14 @@ function limitLayers(
   const ticks = hatchTicks(line, tick.spacing, tick.length, (_, normal) =>
     normal.x > 0 === (limit.forbidden === 'aft') ? 1 : -1,
   );
-  const free = ticks.filter(({ from, to }) =>
-    [from, to].every((end) =>
-      spots.every((spot) => Math.hypot(end.x - spot.x, end.y - spot.y) > spot.radius),
-    ),
-  );
+  const inPlot = ({ x, y }: Point) => x >= 0 && y >= 0 && x <= plot.width && y <= plot.height;
+  const free = ticks
+    .filter(({ to }) => inPlot(to))
+    .filter(({ from, to }) =>
+      [from, to].every((end) =>
+        spots.every((spot) => Math.hypot(end.x - spot.x, end.y - spot.y) > spot.radius),
+      ),
+    );
   const rows = free.map(({ from, to }) => {
     const [a, b] = [map.fromPixels(from), map.fromPixels(to)];
     return { x: a.x, y: a.y, x2: b.x, y2: b.y };

@@ -54,6 +54,7 @@ export const theme: Config = {
     grid: false,
     labelLimit: 220,
     titleLimit: 0,
+    labelFlush: false,
   },
   title: {
     anchor: 'start',

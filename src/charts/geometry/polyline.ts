@@ -98,3 +98,15 @@ function subdivided(line: Polyline, spots: readonly Spot[]): Point[] {
   }
   return dense;
 }
+
+/** Spots along a line, about `every` apart. */
+export function spotsAlong(line: Polyline, every: number, radius: number): Spot[] {
+  if (line.length < 2) return [];
+  const lengths = arcLengths(line);
+  const total = lengths.at(-1)!;
+  const count = Math.ceil(total / every);
+  return Array.from({ length: count + 1 }, (_, k) => {
+    const { x, y } = pointAlong(line, lengths, Math.min(total, k * every));
+    return { x, y, radius };
+  });
+}
