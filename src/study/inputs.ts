@@ -29,7 +29,7 @@ export interface InputDefinition {
 }
 
 const deg = Math.PI / 180;
-const percent = 0.01;
+const hundred = 100;
 
 type Row = readonly [
   path: string,
@@ -44,6 +44,7 @@ type Row = readonly [
 
 const zero = (source: string): InputDefault => ({ value: 0, source });
 const level = zero('taken as level; common practice, no source');
+const symmetric = zero('taken as symmetric; common practice, no source');
 const datum = 'any datum near the aeroplane';
 
 /** Rows of a section, the same for wing and tail; `surface` is the path before `.section`. */
@@ -68,6 +69,7 @@ function sectionRows(surface: 'wing' | 'tail', mark: string): Row[] {
       -15 * deg,
       15 * deg,
       'more camber than any plain section has',
+      symmetric,
     ],
     [
       path('moment'),
@@ -77,16 +79,17 @@ function sectionRows(surface: 'wing' | 'tail', mark: string): Row[] {
       -0.5,
       0.5,
       'more camber than any plain section has',
+      symmetric,
     ],
     [
       path('aerodynamic_centre'),
       `x_ac${mark}/c`,
       'ratio',
       `Aerodynamic centre ${of}, fraction of the chord behind the leading edge.`,
-      15 * percent,
-      35 * percent,
+      15 / hundred,
+      35 / hundred,
       'sections at subsonic speed lie near 25 %',
-      { value: 25 * percent, source: 'quarter chord; common practice, no source' },
+      { value: 25 / hundred, source: 'quarter chord; common practice, no source' },
     ],
     [
       path('maximum_lift'),
@@ -96,15 +99,17 @@ function sectionRows(surface: 'wing' | 'tail', mark: string): Row[] {
       0.3,
       4,
       'a flat plate reaches more than 0.3; 4 is beyond slotted flaps on a whole wing',
+      { value: 1.4, source: 'common practice, no source' },
     ],
     [
       path('thickness'),
       `t/c${mark}`,
       'ratio',
       `Thickness ${of}, fraction of the chord.`,
-      1 * percent,
-      40 * percent,
+      1 / hundred,
+      40 / hundred,
       'from a flat plate to a faired strut',
+      { value: 12 / hundred, source: 'common practice, no source' },
     ],
   ];
 }
@@ -127,7 +132,7 @@ const wingRows: Row[] = [
     'Wing aspect ratio, span squared over area.',
     1,
     60,
-    'the lift-slope formulas fail below 1; no wing has been built beyond 60',
+    'the lift-slope formulas fail below 1; beyond 60 there is no wing to compare with',
   ],
   ['wing.root_chord', 'c_r', 'length', 'Wing chord on the centreline.', 0.01, 30, 'as for the area'],
   [
@@ -222,8 +227,8 @@ const wingRows: Row[] = [
     'f_[n]',
     'ratio',
     'Width of wing panel [n] over the semi-span.',
-    0.5 * percent,
-    100 * percent,
+    0.5 / hundred,
+    100 / hundred,
     'all panels together make up the semi-span',
   ],
   [
@@ -278,7 +283,7 @@ const tailRows: Row[] = [
   ],
   [
     'tail.volume',
-    'V',
+    'V_H',
     'ratio',
     'Tail volume: tail area times tail arm over wing area and mean aerodynamic chord.',
     0.02,
@@ -378,20 +383,20 @@ const tailRows: Row[] = [
     'E',
     'ratio',
     'Elevator chord over tail chord.',
-    5 * percent,
-    90 * percent,
+    5 / hundred,
+    90 / hundred,
     'less does nothing, more is an all-moving tail',
-    { value: 40 * percent, source: 'common practice, no source' },
+    { value: 40 / hundred, source: 'common practice, no source' },
   ],
   [
     'tail.elevator.span_fraction',
     'b_e/b_t',
     'ratio',
     'Part of the tail’s span that carries the elevator.',
-    5 * percent,
-    100 * percent,
+    5 / hundred,
+    100 / hundred,
     'at most the whole span',
-    { value: 95 * percent, source: 'common practice, no source' },
+    { value: 95 / hundred, source: 'common practice, no source' },
   ],
   [
     'tail.elevator.effectiveness_ratio',
@@ -471,7 +476,7 @@ const otherRows: Row[] = [
   ],
   [
     'conditions[n].speed',
-    'V',
+    'V_c',
     'speed',
     'Calibrated airspeed of condition [n].',
     1,
