@@ -1,7 +1,8 @@
 import type { TableColumn } from '../figures/figure.ts';
 import { type Block, checkBlock } from './block.ts';
 import { csvText, labelText } from './cells.ts';
-import { longestNumber, writeCount, writeNumber } from './csv-number.ts';
+import { ColumnTexts, entryOf, judge, remembered, slotBytes, type TextPlace } from './csv-column.ts';
+import { writeCount, writeNumber } from './csv-number.ts';
 
 const comma = 44;
 const lineFeed = 10;
@@ -9,48 +10,12 @@ const doubleBytes = 8;
 
 /** Rows worked through at a time: their cells' texts fit the second-level cache. */
 const tileRows = 128;
-/** Bytes kept for a number's text and its separator; a multiple of eight, so that texts start aligned. */
-const slotBytes = longestNumber;
-/** Texts remembered per column: enough for axes and for figures of a few thousand distinct values. */
-const rememberedBits = 12;
-const remembered = 1 << rememberedBits;
-/** A column of whose cells fewer than this share repeat is formatted straight for a while. */
-const worthRemembering = 1 / 8;
-const judgedOver = 1024;
-const straightFor = 16_384;
+/** Words of one entry that waits to be remembered. */
+const pendingWords = 6;
 /** Texts of flag sets are forgotten, between tiles, when they outgrow this. */
 const flagTextLimit = 4 << 20;
 
 const utf8 = new TextEncoder();
-
-interface TextPlace {
-  readonly at: number;
-  readonly length: number;
-}
-
-/** What one column needs to turn its doubles into texts. */
-class ColumnTexts {
-  /** Two words of a remembered double's bits per entry. A free one holds the bits of a NaN and its empty text. */
-  readonly keys: Int32Array;
-  readonly lengths: Uint8Array;
-  /** Rows left to format straight, without looking up. */
-  straight = 0;
-  judgedRows = 0;
-  misses = 0;
-  /** Texts of labels and of flag sets met so far. */
-  readonly places = new Map<number, TextPlace>();
-
-  constructor(
-    readonly column: TableColumn,
-    readonly separator: number,
-    readonly scratch: number,
-    readonly memory: number,
-  ) {
-    const isNumber = column.figure.kind === 'number';
-    this.keys = new Int32Array(isNumber ? 2 * remembered : 0).fill(-1);
-    this.lengths = new Uint8Array(isNumber ? remembered : 0).fill(1);
-  }
-}
 
 /**
  * Writes blocks as CSV (RFC 4180 quoting, LF line ends, UTF-8) into one growing buffer.
@@ -134,7 +99,7 @@ export class CsvBlockWriter {
 
   #place(c: number, values: Float64Array, words: Int32Array, start: number, rows: number): void {
     const texts = this.#texts[c];
-    if (texts.column.figure.kind !== 'number') this.#placeLabels(c, texts, values, start, rows);
+    if (!texts.isNumber) this.#placeLabels(c, texts, values, start, rows);
     else if (texts.straight > 0) {
       texts.straight -= rows;
       this.#placeStraight(c, texts, values, start, rows);
@@ -193,11 +158,11 @@ export class CsvBlockWriter {
 
   /** The text of one number with its separator, at `at`; returns its length. */
   #format(texts: ColumnTexts, value: number, at: number): number {
-    const scaled = value * texts.column.factor;
+    const scaled = value * texts.factor;
     let end = at;
     // Neither NaN nor infinity minus itself is zero.
     if (scaled - scaled === 0) {
-      if (texts.column.figure.dimension === 'count') end = writeCount(scaled, this.#arena, at);
+      if (texts.isCount) end = writeCount(scaled, this.#arena, at);
       else end = writeNumber(scaled, this.#arena, at);
     }
     this.#arena[end++] = texts.separator;
@@ -299,21 +264,4 @@ export class CsvBlockWriter {
     }
     this.#pendingEnd = 0;
   }
-}
-
-const pendingWords = 6;
-
-/** Where a double of these bits is remembered (multiplicative hashing; the odd factors are arbitrary). */
-function entryOf(first: number, second: number): number {
-  return Math.imul(first ^ Math.imul(second, 0x9e3779b1), 0x85ebca6b) >>> (32 - rememberedBits);
-}
-
-/** Turns remembering off for a while when it does not pay; the bytes are the same either way. */
-function judge(texts: ColumnTexts, rows: number, misses: number): void {
-  texts.judgedRows += rows;
-  texts.misses += misses;
-  if (texts.judgedRows < judgedOver) return;
-  if (texts.misses > (1 - worthRemembering) * texts.judgedRows) texts.straight = straightFor;
-  texts.judgedRows = 0;
-  texts.misses = 0;
 }

@@ -78,55 +78,58 @@ function writeSlowly(magnitude: number, bytes: Uint8Array, at: number): number {
   return writeDigits(Number(mantissa.replace('.', '')), Number(exponent), bytes, at);
 }
 
-/** Lays out mantissa/1e6 · 10^exponent, mantissa of seven digits. */
-function writeDigits(sevenDigits: number, exponent: number, bytes: Uint8Array, at: number): number {
-  let mantissa = sevenDigits;
-  let digits = significantDigits;
-  while (digits > 1) {
-    const shorter = (mantissa / 10) | 0;
-    if (shorter * 10 !== mantissa) break;
-    mantissa = shorter;
-    digits--;
-  }
-  if (exponent < leastPlainExponent || exponent > mostPlainExponent) {
-    const end = writeWithPoint(mantissa, digits, 0, bytes, at);
-    return writeExponent(exponent, bytes, end);
-  }
-  if (exponent < 0) {
-    bytes[at++] = zero;
-    bytes[at++] = point;
-    for (let k = -1; k > exponent; k--) bytes[at++] = zero;
-    return writeDigitRun(mantissa, digits, bytes, at);
-  }
-  if (exponent < digits - 1) return writeWithPoint(mantissa, digits, exponent, bytes, at);
-  at = writeDigitRun(mantissa, digits, bytes, at);
-  for (let k = digits - 1; k < exponent; k++) bytes[at++] = zero;
-  return at;
+/** The four digits of 0 … 9999, one number after the other. */
+const fourDigits = Uint8Array.from({ length: 40_000 }, (_, k) => {
+  const number = k >> 2;
+  return zero + (Math.floor(number / 10 ** (3 - (k & 3))) % 10);
+});
+
+/** Writes seven digits at `at`. */
+function writeSeven(mantissa: number, bytes: Uint8Array, at: number): void {
+  const upper = (mantissa / 10_000) | 0;
+  const first = 4 * upper;
+  const second = 4 * (mantissa - 10_000 * upper);
+  bytes[at] = fourDigits[first + 1];
+  bytes[at + 1] = fourDigits[first + 2];
+  bytes[at + 2] = fourDigits[first + 3];
+  bytes[at + 3] = fourDigits[second];
+  bytes[at + 4] = fourDigits[second + 1];
+  bytes[at + 5] = fourDigits[second + 2];
+  bytes[at + 6] = fourDigits[second + 3];
 }
 
-/** The digits with a point after the first `exponent + 1` of them; no point when none is left. */
-function writeWithPoint(
-  mantissa: number,
-  digits: number,
-  exponent: number,
-  bytes: Uint8Array,
-  at: number,
-): number {
-  if (digits === exponent + 1) return writeDigitRun(mantissa, digits, bytes, at);
-  const end = at + digits + 1;
+/** Lays out mantissa/1e6 · 10^exponent, mantissa of seven digits. */
+function writeDigits(mantissa: number, exponent: number, bytes: Uint8Array, at: number): number {
+  if (exponent < leastPlainExponent || exponent > mostPlainExponent) {
+    return writeExponent(exponent, bytes, writeWithPoint(mantissa, 0, bytes, at));
+  }
+  if (exponent >= significantDigits - 1) {
+    writeSeven(mantissa, bytes, at);
+    const end = at + exponent + 1;
+    for (let k = at + significantDigits; k < end; k++) bytes[k] = zero;
+    return end;
+  }
+  if (exponent >= 0) return writeWithPoint(mantissa, exponent, bytes, at);
+  bytes[at++] = zero;
+  bytes[at++] = point;
+  for (let k = -1; k > exponent; k--) bytes[at++] = zero;
+  writeSeven(mantissa, bytes, at);
+  return withoutZeros(bytes, at + significantDigits);
+}
+
+/** Seven digits with a point after the first `exponent + 1` of them (fewer than seven), zeros at the end dropped. */
+function writeWithPoint(mantissa: number, exponent: number, bytes: Uint8Array, at: number): number {
+  writeSeven(mantissa, bytes, at + 1);
   const pointAt = at + exponent + 1;
-  let rest = mantissa;
-  for (let k = end - 1; k > pointAt; k--) {
-    const shorter = (rest / 10) | 0;
-    bytes[k] = zero + rest - shorter * 10;
-    rest = shorter;
-  }
+  for (let k = at; k < pointAt; k++) bytes[k] = bytes[k + 1];
   bytes[pointAt] = point;
-  for (let k = pointAt - 1; k >= at; k--) {
-    const shorter = (rest / 10) | 0;
-    bytes[k] = zero + rest - shorter * 10;
-    rest = shorter;
-  }
+  const end = withoutZeros(bytes, at + significantDigits + 1);
+  return end === pointAt + 1 ? pointAt : end;
+}
+
+/** The end after dropping zeros before `end`; some other sign must stand before them. */
+function withoutZeros(bytes: Uint8Array, end: number): number {
+  while (bytes[end - 1] === zero) end--;
   return end;
 }
 

@@ -42,6 +42,11 @@ export class CaseSql {
     this.requirements = this.#columns.get('fails')?.figure.labels ?? [];
   }
 
+  /** All columns that the files must have. */
+  everyColumn(): string {
+    return [...this.#columns.keys()].map((figure) => this.si(figure)).join(', ');
+  }
+
   /** A figure as the double that a block held: SI, an index, a bit set. */
   si(figure: string): string {
     const column = this.#column(figure);

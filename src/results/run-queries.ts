@@ -1,7 +1,7 @@
 import { readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { type DuckDBConnection, DuckDBInstance } from '@duckdb/node-api';
-import { UsageError } from '../errors.ts';
+import { MachineError, UsageError } from '../errors.ts';
 import type { TableColumn } from '../figures/figure.ts';
 import { casesFileName } from './assemble.ts';
 import { type BandOverride, bandLabels, CaseSql, literal } from './query-sql.ts';
@@ -86,7 +86,10 @@ export class RunQueries {
     this.#sql = sql;
   }
 
-  /** Opens the Parquet files of a run folder; RUN_NOT_FINISHED when there are none. */
+  /**
+   * Opens the Parquet files of a run folder; RUN_NOT_FINISHED when there are none, READ_FAILED when
+   * they are damaged or hold another table.
+   */
   static async open(folder: string, columns: readonly TableColumn[]): Promise<RunQueries> {
     const files = parquetFiles(folder);
     if (files.length === 0) {
@@ -97,7 +100,19 @@ export class RunQueries {
       );
     }
     const database = await DuckDBInstance.create(':memory:', databaseOptions);
-    return new RunQueries(database, await database.connect(), columns, new CaseSql(files, columns));
+    const sql = new CaseSql(files, columns);
+    const queries = new RunQueries(database, await database.connect(), columns, sql);
+    try {
+      await queries.#numbers(`SELECT ${sql.everyColumn()} FROM ${sql.cases} LIMIT 0`);
+    } catch (error) {
+      queries.close();
+      throw new MachineError(
+        'READ_FAILED',
+        `The table in ${folder} cannot be read: ${error instanceof Error ? error.message : error}`,
+        'Delete the cases files in that folder and run the same study again.',
+      );
+    }
+    return queries;
   }
 
   close(): void {

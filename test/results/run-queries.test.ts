@@ -1,4 +1,4 @@
-import { mkdtempSync, rmSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
@@ -282,6 +282,16 @@ describe('opening', () => {
     await expect(opened).rejects.toMatchObject({ name: 'UsageError', code: 'RUN_NOT_FINISHED' });
     const nowhere = RunQueries.open(join(folder, 'nowhere'), columns);
     await expect(nowhere).rejects.toMatchObject({ name: 'UsageError', code: 'NO_SUCH_RUN' });
+  });
+
+  test('damaged files, or those of another table, is READ_FAILED', async () => {
+    const wanted = { name: 'MachineError', code: 'READ_FAILED' };
+    await expect(RunQueries.open(folder, [...columns, column('more')])).rejects.toMatchObject(wanted);
+    const damaged = join(folder, 'damaged');
+    mkdirSync(damaged);
+    const bytes = readFileSync(join(folder, 'cases-0001.parquet'));
+    writeFileSync(join(damaged, 'cases.parquet'), bytes.subarray(0, bytes.length - 100));
+    await expect(RunQueries.open(damaged, columns)).rejects.toMatchObject(wanted);
   });
 
   test('asking for a figure that the table lacks is a bug and says so', async () => {
