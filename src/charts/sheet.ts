@@ -52,7 +52,6 @@ export function sheet(
       subtitle,
     },
     spacing: rowGap,
-    align: 'none',
     vconcat: [...rows, caption(heading, width)],
   };
 }

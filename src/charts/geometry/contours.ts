@@ -66,9 +66,16 @@ function crossesBetweenValues({ xs, ys, values }: GridField, level: number, i: n
   if (i0 < 0 || j0 < 0 || i1 >= xs.length || j1 >= ys.length) return false;
   const low = values[j0 * xs.length + i0]!;
   const high = values[j1 * xs.length + i1]!;
-  // A ring that runs beside an empty place stands on grid points that do not have the level's value.
-  const onGridPoint = i0 === i1 && j0 === j1;
-  return onGridPoint ? low === level : !Number.isNaN(low) && !Number.isNaN(high);
+  // Beside an empty place the ring stands on grid points that have not the level's value.
+  if (i0 === i1 && j0 === j1 && low !== level) return !besideEmpty(values, xs.length, i0, j0);
+  return !Number.isNaN(low) && !Number.isNaN(high);
+}
+
+function besideEmpty(values: ArrayLike<number>, n: number, i: number, j: number): boolean {
+  const at = j * n + i;
+  const sideways = [i > 0 ? at - 1 : at, i < n - 1 ? at + 1 : at];
+  // Beyond the first and last row there is no value at all, which is no empty place.
+  return [at, ...sideways, at - n, at + n].some((index) => Number.isNaN(values[index] ?? 0));
 }
 
 function place(field: GridField, x: number, y: number): Point {
