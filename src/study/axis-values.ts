@@ -156,7 +156,7 @@ function countFromStep(ends: Ends, reading: Reading): number | undefined {
   const range = to.si - from.si;
   if (range === 0 && step.si !== 0) return 1;
   const steps = range / step.si;
-  if (!(steps > 0)) {
+  if (step.si === 0 || !(steps > 0)) {
     const direction = range > 0 ? 'up' : 'down';
     const found =
       step.si === 0

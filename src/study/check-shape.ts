@@ -3,6 +3,7 @@
 import type { Baseline } from './hold.ts';
 import { inputDefinition } from './inputs.ts';
 import { isFault, type Quantity, rangeFault } from './quantities.ts';
+import { fewestStations } from './read-body.ts';
 import type { PlacedAxis } from './read-vary.ts';
 import type { Reading } from './reading.ts';
 import type { Span } from './source.ts';
@@ -52,7 +53,7 @@ export function checkTailPlace(
     const found = `The tail’s quarter-MAC lies at station ${metres(station)}, not aft of the wing’s root trailing edge at ${metres(wing.rootTrailingEdge)}.`;
     reading.faults.add('TAIL_AHEAD_OF_WING', span, found, tailOrder);
   }
-  if (!body || body.boom || body.stations === 0) return;
+  if (!body || body.boom || body.stations < fewestStations) return;
   const end = reading.inputs.get(`body.stations[${body.stations}].at`);
   if (end === undefined || !(station > end)) return;
   const found = `The tail’s quarter-MAC lies at station ${metres(station)}, beyond the end of the body at ${metres(end)}.`;

@@ -249,11 +249,12 @@ class TreeBuilder {
 
   #scalar(node: Node): ScalarNode {
     const span = spanOf(node);
-    if (!isScalar(node)) return empty(span);
-    const value = node.value;
-    const plain =
-      typeof value === 'number' || typeof value === 'boolean' || value === null ? value : String(value);
-    return { kind: 'scalar', text: node.source ?? String(value), value: plain, span };
+    if (!isScalar(node)) return { kind: 'scalar', text: '*', value: null, span };
+    const { value } = node;
+    const text = node.source ?? String(value);
+    // a number beyond what a double holds stays a text, which the reading of quantities refuses
+    const isPlain = Number.isFinite(value) || typeof value === 'boolean' || value === null;
+    return { kind: 'scalar', text, value: isPlain ? (value as ScalarNode['value']) : text, span };
   }
 }
 

@@ -2,7 +2,8 @@ import type { Reading } from './reading.ts';
 import { keySpan, type ListNode, mapIn, type SourceNode, valueIn } from './source.ts';
 import type { BodyChoices } from './study.ts';
 
-const fewestStations = 2;
+/** The nose and the end. */
+export const fewestStations = 2;
 const mostStations = 200;
 
 /** Reads `aeroplane.body` into the inputs; undefined for `none`. */

@@ -40,10 +40,16 @@ function tellValue(
   faults: FaultList,
 ): void {
   const branch = issue.code === 'invalid_union' ? deepestBranch(issue.errors) : undefined;
+  const words = node.kind === 'scalar' && typeof node.value === 'string' ? wordsOf(issue) : [];
   if (branch) for (const inner of branch) tell(inner, path, root, faults);
-  else if (issue.code === 'invalid_value' && node.kind === 'scalar')
-    tellUnknownWord(issue.values.map(String), path, node, faults);
+  else if (words.length > 0) tellUnknownWord(words, path, node as ScalarNode, faults);
   else tellWrongType(wantedBy(issue), path, node, faults);
+}
+
+/** The words that may stand there, over all alternatives. */
+function wordsOf(issue: Issue): string[] {
+  if (issue.code === 'invalid_value') return issue.values.map(String);
+  return issue.code === 'invalid_union' ? issue.errors.flat().flatMap(wordsOf) : [];
 }
 
 /** The branch of a union that the author meant: the one whose faults lie deeper than the value itself. */
