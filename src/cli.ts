@@ -1,15 +1,11 @@
 #!/usr/bin/env node
-/** Arguments and exit codes, nothing else. Every command is loaded only when it is called. */
-import { readFileSync } from 'node:fs';
-import yargs from 'yargs';
 import type { Argv } from 'yargs';
+/** Arguments and exit codes, nothing else. Every command is loaded only when it is called. */
+import yargs from 'yargs';
 import { hideBin } from 'yargs/helpers';
-import { exitCodes } from './errors.ts';
 import { tellFailure, usageFailure } from './commands/failure.ts';
-
-const version: string = JSON.parse(
-  readFileSync(new URL('../package.json', import.meta.url), 'utf8'),
-).version;
+import { exitCodes } from './errors.ts';
+import { program } from './version.ts';
 
 /** yargs turns a repeated flag into a list and a bad number into NaN; both are mistakes here. */
 function singleNumber(name: string) {
@@ -39,7 +35,11 @@ function textOption(describe: string, name: string) {
 }
 
 const studyArgument = { type: 'string', demandOption: true, describe: 'study file (YAML)' } as const;
-const runArgument = { type: 'string', demandOption: true, describe: 'run folder, such as out/coastal-tourer' } as const;
+const runArgument = {
+  type: 'string',
+  demandOption: true,
+  describe: 'run folder, such as out/coastal-tourer',
+} as const;
 
 function runCommand(parser: Argv) {
   return parser.command(
@@ -51,11 +51,21 @@ function runCommand(parser: Argv) {
         .option('out', textOption('folder that holds the runs', 'out'))
         .option('name', textOption('name of the run folder (default: the study file’s)', 'name'))
         .option('workers', numberOption('worker threads (default: one per core)', 'workers'))
-        .option('part-size', numberOption('combinations a part, rounded up to whole blocks of 16384', 'part-size'))
+        .option(
+          'part-size',
+          numberOption('combinations a part, rounded up to whole blocks of 16384', 'part-size'),
+        )
         .option('afresh', { type: 'boolean', default: false, describe: 'discard what the run folder holds' })
-        .option('charts', { type: 'boolean', default: true, describe: 'draw the charts (--no-charts leaves them out)' })
-        .option('quiet', { type: 'boolean', alias: 'q', default: false, describe: 'say nothing but errors' })
-        .option('json-lines', { type: 'boolean', default: false, describe: 'progress as one JSON object a line' })
+        .option('charts', {
+          type: 'boolean',
+          default: true,
+          describe: 'draw the charts (--no-charts leaves them out)',
+        })
+        .option('quiet', { type: 'boolean', alias: 'q', describe: 'say nothing but errors' })
+        .option('json-lines', {
+          type: 'boolean',
+          describe: 'progress as one JSON object a line',
+        })
         .conflicts('quiet', 'json-lines'),
     async (args) => (await import('./commands/run.ts')).run(args),
   );
@@ -78,7 +88,10 @@ function readingCommands(parser: Argv) {
       (command) =>
         command
           .positional('study', { ...studyArgument, describe: 'study file or run folder' })
-          .option('combination', numberOption('number of the combination (default: the baseline)', 'combination'))
+          .option(
+            'combination',
+            numberOption('number of the combination (default: the baseline)', 'combination'),
+          )
           .option('set', {
             type: 'string',
             array: true,
@@ -94,7 +107,14 @@ function readingCommands(parser: Argv) {
       (command) =>
         command
           .positional('run', runArgument)
-          .option('band', textOption('another static-margin band, such as 8%:18% (either edge may be left out)', 'band')),
+          .option(
+            'band',
+            textOption('another static-margin band, such as 8%:18% (either edge may be left out)', 'band'),
+          )
+          .option(
+            'carpet',
+            textOption('figure of the carpet plot, and two axes: "tail_area tail.arm tail.volume"', 'carpet'),
+          ),
       async (args) => (await import('./commands/charts.ts')).charts(args),
     );
 }
@@ -131,8 +151,10 @@ async function main(): Promise<void> {
   const parser = yargs(hideBin(process.argv))
     .scriptName('aftlimit')
     .locale('en')
-    .usage('$0 <command>\n\nTrade studies of wing and tail: is the static margin kept over the whole loading range?')
-    .version(version)
+    .usage(
+      '$0 <command>\n\nTrade studies of wing and tail: is the static margin kept over the whole loading range?',
+    )
+    .version(program.version)
     .help()
     .alias('h', 'help')
     .strict()
@@ -140,7 +162,9 @@ async function main(): Promise<void> {
     .demandCommand(1, 'A command is wanted; see --help.')
     .parserConfiguration({ 'duplicate-arguments-array': true, 'parse-positional-numbers': false })
     .wrap(Math.min(110, process.stdout.columns ?? 100))
-    .epilogue('Results go to standard output, everything else to standard error. Exit 0: done; 1: the machine; 2: the study or the arguments.')
+    .epilogue(
+      'Results go to standard output, everything else to standard error. Exit 0: done; 1: the machine; 2: the study or the arguments.',
+    )
     .completion('completion', 'print a completion script for bash or zsh')
     .exitProcess(false)
     .fail((message, error) => {

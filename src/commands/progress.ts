@@ -1,4 +1,5 @@
 import type { FinishedRun, PlannedRun, Reporter } from '../engine/reporter.ts';
+import { byteText, countText, durationText } from '../reports/number-text.ts';
 
 const barWidth = 30;
 const barInterval = 100;
@@ -7,7 +8,10 @@ const lineInterval = 5000;
 export type ProgressMode = 'bar' | 'lines' | 'json' | 'quiet';
 
 /** How progress is told: a bar on a terminal, plain lines elsewhere, unless the user chose. */
-export function progressMode(options: { quiet?: boolean; jsonLines?: boolean }): ProgressMode {
+export function progressMode(options: {
+  quiet: boolean | undefined;
+  jsonLines: boolean | undefined;
+}): ProgressMode {
   if (options.quiet) return 'quiet';
   if (options.jsonLines) return 'json';
   return process.stderr.isTTY ? 'bar' : 'lines';
@@ -81,46 +85,25 @@ function textReporter(bar: boolean): Reporter {
 function progressText(done: number, total: number, sinceStart: number, seconds: number): string {
   const percent = total === 0 ? 100 : Math.floor((100 * done) / total);
   const rate = seconds > 0 ? sinceStart / seconds : 0;
-  const left = rate > 0 ? `, ${duration((total - done) / rate)} left` : '';
-  const perSecond = rate > 0 ? `, ${count(Math.round(rate))}/s` : '';
-  return `${percent} %  ${count(done)} of ${count(total)}${perSecond}${done < total ? left : ''}`;
+  const left = rate > 0 ? `, ${durationText((total - done) / rate)} left` : '';
+  const perSecond = rate > 0 ? `, ${countText(Math.round(rate))}/s` : '';
+  return `${percent} %  ${countText(done)} of ${countText(total)}${perSecond}${done < total ? left : ''}`;
 }
 
 export function plannedLines(plan: PlannedRun): string[] {
   const resumed =
-    plan.alreadyDone > 0 ? [`Going on from an earlier sitting: ${count(plan.alreadyDone)} combinations are there.`] : [];
+    plan.alreadyDone > 0
+      ? [`Going on from an earlier sitting: ${countText(plan.alreadyDone)} combinations are there.`]
+      : [];
   return [
     plan.title,
-    `${count(plan.combinations)} combinations on ${plan.workers} worker${plan.workers === 1 ? '' : 's'}, about ${duration(plan.secondsExpected)}; ` +
-      `needs ${bytes(plan.bytesNeeded)} of ${bytes(plan.bytesFree)} free in ${plan.folder}`,
+    `${countText(plan.combinations)} combinations on ${plan.workers} worker${plan.workers === 1 ? '' : 's'}, about ${durationText(plan.secondsExpected)}; ` +
+      `needs ${byteText(plan.bytesNeeded)} of ${byteText(plan.bytesFree)} free in ${plan.folder}`,
     ...resumed,
   ];
 }
 
 function finishedText(run: FinishedRun): string {
   const share = run.rows === 0 ? '' : ` (${((100 * run.feasible) / run.rows).toFixed(1)} %)`;
-  return `Done in ${duration(run.seconds)}: ${count(run.feasible)} of ${count(run.rows)} combinations are feasible${share}. See ${run.folder}/summary.md`;
-}
-
-/** 300000 → `300 000`, with thin no-break spaces as ISO 80000 writes large numbers. */
-export function count(value: number): string {
-  return String(Math.round(value)).replaceAll(/\B(?=(\d{3})+(?!\d))/g, '\u202f');
-}
-
-export function bytes(value: number): string {
-  const units = ['B', 'kB', 'MB', 'GB', 'TB'];
-  let amount = value;
-  let unit = 0;
-  while (amount >= 1000 && unit < units.length - 1) {
-    amount /= 1000;
-    unit++;
-  }
-  return `${amount >= 100 || unit === 0 ? amount.toFixed(0) : amount.toPrecision(3)} ${units[unit]}`;
-}
-
-export function duration(seconds: number): string {
-  if (seconds < 1) return 'under a second';
-  if (seconds < 90) return `${Math.round(seconds)} s`;
-  if (seconds < 5400) return `${Math.round(seconds / 60)} min`;
-  return `${(seconds / 3600).toFixed(1)} h`;
+  return `Done in ${durationText(run.seconds)}: ${countText(run.feasible)} of ${countText(run.rows)} combinations are feasible${share}. See ${run.folder}/summary.md`;
 }

@@ -30,7 +30,9 @@ export class Evaluator {
     tileRows?: number,
   ) {
     this.tiles = new Tiles(plan, tileRows);
-    this.memories = plan.stages.map((stage, index) => new StageMemory(stage, plan.axesOfStage[index], this.tiles));
+    this.memories = plan.stages.map(
+      (stage, index) => new StageMemory(stage, plan.axesOfStage[index], this.tiles),
+    );
     this.skipStageCount = 1 + plan.stages.findIndex((stage) => stage.writes.includes(skippedFigure));
     this.columns = wanted.map(() => new Float64Array(blockSize));
     this.rows = new Int32Array(this.tiles.shape.rows);

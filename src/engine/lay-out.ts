@@ -1,6 +1,6 @@
-import type { Figure, TableColumn } from '../figures/figure.ts';
 import { figureNames, isWorksheetOnly } from '../figures/catalogue.ts';
 import { tableColumn } from '../figures/display.ts';
+import type { Figure, TableColumn } from '../figures/figure.ts';
 import { figureOfInput, figuresOfStudy } from '../figures/study-figures.ts';
 import type { Plan } from '../plan/plan.ts';
 import { makePlan } from '../plan/plan.ts';

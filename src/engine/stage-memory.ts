@@ -1,7 +1,7 @@
 import type { AxisSet } from '../plan/dependencies.ts';
 import type { Stage } from '../stages/stage.ts';
-import type { FigureSource, Tiles } from './tiles.ts';
 import { rowMap } from './tile.ts';
+import type { FigureSource, Tiles } from './tiles.ts';
 
 /** Bytes that one stage may keep of what it worked out. */
 const memoryPerStage = 4 * 1024 * 1024;

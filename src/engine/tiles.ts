@@ -1,5 +1,5 @@
-import type { Plan } from '../plan/plan.ts';
 import type { AxisSet } from '../plan/dependencies.ts';
+import type { Plan } from '../plan/plan.ts';
 import type { TileShape } from './tile.ts';
 import { rowMap, tileShape } from './tile.ts';
 
@@ -48,7 +48,11 @@ export class Tiles {
   chunk = 0;
   private prefix = -1;
   private readonly sources = new Map<string, FigureSource>();
-  private readonly standing: { readonly values: Float64Array; readonly axis: number; readonly source: FigureSource }[] = [];
+  private readonly standing: {
+    readonly values: Float64Array;
+    readonly axis: number;
+    readonly source: FigureSource;
+  }[] = [];
   private readonly cut: { readonly values: Float64Array; readonly source: FigureSource }[] = [];
 
   constructor(
@@ -59,7 +63,9 @@ export class Tiles {
     this.digits = new Int32Array(this.shape.suffixStart);
     for (const [name, value] of plan.fixed) this.declare(name, Float64Array.of(value), []);
     plan.axes.forEach((axis, position) => {
-      axis.figures.forEach((name, k) => this.declareAxis(name, axis.values[k], position));
+      axis.figures.forEach((name, k) => {
+        this.declareAxis(name, axis.values[k], position);
+      });
     });
   }
 

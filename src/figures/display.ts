@@ -1,5 +1,5 @@
-import type { Dimension, TableColumn, Figure } from './figure.ts';
 import type { ShowSystem } from '../study/study.ts';
+import type { Dimension, Figure, TableColumn } from './figure.ts';
 
 /** How one dimension is shown: the unit's text, the factor from SI to it, and decimals that suit it. */
 export interface DisplayUnit {

@@ -1,5 +1,5 @@
-import type { CgKind } from '../study/study.ts';
 import { inputDefinition } from '../study/inputs.ts';
+import type { CgKind } from '../study/study.ts';
 import type { Dimension, Figure } from './figure.ts';
 
 /** CG ends are figures of their own kind: a CG given as % MAC is the same figure as the one worked out. */

@@ -1,8 +1,8 @@
 import type { Study } from '../study/study.ts';
-import { catalogueFigure, figureNames } from './catalogue.ts';
 import type { FigureName } from './catalogue.ts';
-import { inputFigure, inputFigureName } from './input-figures.ts';
+import { catalogueFigure, figureNames } from './catalogue.ts';
 import type { Figure } from './figure.ts';
+import { inputFigure, inputFigureName } from './input-figures.ts';
 
 type Wording = Partial<Pick<Figure, 'formula' | 'source'>>;
 
@@ -31,14 +31,18 @@ function chosenWording(study: Study): Partial<Record<FigureName, Wording>> {
 }
 
 function bodyWording(study: Study): Wording {
-  if (study.body === undefined) return { formula: 'C_mα,b = 0: the study says there is no body', source: 'the study' };
+  if (study.body === undefined)
+    return { formula: 'C_mα,b = 0: the study says there is no body', source: 'the study' };
   if (study.methods.body_moment === 'quick_estimate') {
     return {
       formula: 'C_mα,b = K_f w² L/(S c)',
       source: 'Gilruth and White, NACA TR 711, from memory, unconfirmed',
     };
   }
-  return { formula: 'C_mα,b = (π/2)(I_f + (1−ε_α) I_a)/(S c)', source: 'Multhopp, NACA TM 1036; upwash ours' };
+  return {
+    formula: 'C_mα,b = (π/2)(I_f + (1−ε_α) I_a)/(S c)',
+    source: 'Multhopp, NACA TM 1036; upwash ours',
+  };
 }
 
 /** Labels of the study's `choice` and `flags` figures. */

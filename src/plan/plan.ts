@@ -1,7 +1,7 @@
-import type { Axis, Study } from '../study/study.ts';
 import type { Stage } from '../stages/stage.ts';
-import { axesOfStages } from './dependencies.ts';
+import type { Axis, Study } from '../study/study.ts';
 import type { AxisSet } from './dependencies.ts';
+import { axesOfStages } from './dependencies.ts';
 import { orderAxes } from './order-axes.ts';
 
 /**

@@ -1,6 +1,6 @@
+import type { LaidOut } from '../engine/lay-out.ts';
 import { displayUnit } from '../figures/display.ts';
 import type { Figure } from '../figures/figure.ts';
-import type { LaidOut } from '../engine/lay-out.ts';
 import type { PlanAxis } from '../plan/plan.ts';
 import type { ShowSystem } from '../study/study.ts';
 

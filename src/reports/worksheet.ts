@@ -1,10 +1,10 @@
+import type { LaidOut } from '../engine/lay-out.ts';
+import { edgeTolerance } from '../figures/band.ts';
 import { displayUnit } from '../figures/display.ts';
 import type { Figure } from '../figures/figure.ts';
-import type { LaidOut } from '../engine/lay-out.ts';
 import { digitsOf } from '../plan/plan.ts';
 import { baselineInputs } from '../stages/build-stages.ts';
 import { runOnce } from '../stages/run-once.ts';
-import { edgeTolerance } from '../stages/requirements.ts';
 import type { ShowSystem, Study } from '../study/study.ts';
 import { cautions } from './cautions.ts';
 
@@ -34,7 +34,9 @@ export function inputsOfCombination({ plan }: LaidOut, combination: number): Map
   const inputs = new Map(plan.fixed);
   digitsOf(plan, combination).forEach((digit, position) => {
     const axis = plan.axes[position];
-    axis.figures.forEach((figure, k) => inputs.set(figure, axis.values[k][digit]));
+    axis.figures.forEach((figure, k) => {
+      inputs.set(figure, axis.values[k][digit]);
+    });
   });
   return inputs;
 }
@@ -43,7 +45,12 @@ export function inputsOfCombination({ plan }: LaidOut, combination: number): Map
  * Works one combination through, every figure in the order of computation.
  * @param inputs input figures, SI (`inputsOfCombination`, or the baseline's)
  */
-export function makeWorksheet(study: Study, laidOut: LaidOut, inputs: ReadonlyMap<string, number>, subject: string): Worksheet {
+export function makeWorksheet(
+  study: Study,
+  laidOut: LaidOut,
+  inputs: ReadonlyMap<string, number>,
+  subject: string,
+): Worksheet {
   const values = runOnce(laidOut.plan.stages, inputs);
   const rows = (names: Iterable<string>) =>
     [...names].flatMap((name) => {
@@ -61,9 +68,14 @@ export function makeWorksheet(study: Study, laidOut: LaidOut, inputs: ReadonlyMa
 }
 
 /** The worksheet of the study's baseline, with some of its numbers replaced. */
-export function baselineWorksheet(study: Study, laidOut: LaidOut, replaced: ReadonlyMap<string, number>): Worksheet {
+export function baselineWorksheet(
+  study: Study,
+  laidOut: LaidOut,
+  replaced: ReadonlyMap<string, number>,
+): Worksheet {
   const inputs = new Map([...baselineInputs(study), ...replaced]);
-  const subject = replaced.size === 0 ? 'the baseline' : `the baseline with ${[...replaced.keys()].join(', ')} replaced`;
+  const subject =
+    replaced.size === 0 ? 'the baseline' : `the baseline with ${[...replaced.keys()].join(', ')} replaced`;
   return makeWorksheet(study, laidOut, inputs, subject);
 }
 
@@ -88,7 +100,11 @@ function valueText(figure: Figure, value: number, show: ShowSystem): { text: str
   return { text: dimension === 'count' ? String(shown) : String(rounded), unit };
 }
 
-function requirementLines({ edges, figures }: LaidOut, values: ReadonlyMap<string, number>, show: ShowSystem): string[] {
+function requirementLines(
+  { edges, figures }: LaidOut,
+  values: ReadonlyMap<string, number>,
+  show: ShowSystem,
+): string[] {
   return edges.map(({ label, figure: name, sign, limit }) => {
     const figure = figures.get(name);
     const value = values.get(name) ?? Number.NaN;

@@ -1,3 +1,4 @@
+import { bandRequirements, edgeTolerance } from '../figures/band.ts';
 import type { TableColumn } from '../figures/figure.ts';
 import { bitSetSuffix } from './parquet-schema.ts';
 
@@ -8,11 +9,8 @@ export interface BandOverride {
 }
 
 /** How the band's edges are named among the requirements. */
-export const bandLabels = { lower: 'static_margin.at_least', upper: 'static_margin.at_most' } as const;
+export const bandLabels = { lower: bandRequirements.lower.name, upper: bandRequirements.upper.name } as const;
 type Edge = keyof typeof bandLabels;
-
-/** Edges are included, with the tolerance that feasibility has everywhere. */
-const edgeTolerance = 1e-9;
 
 /** An edge of another band: kept, missed, or without a margin to judge by. */
 const edgeStates = { kept: 0, missed: 1, empty: 2 } as const;

@@ -2,6 +2,7 @@ import { readFileSync } from 'node:fs';
 import { cpus } from 'node:os';
 import { join } from 'node:path';
 import { UsageError } from '../errors.ts';
+import type { AssembledCases } from './assemble.ts';
 import { writeFileAtomically } from './atomic-file.ts';
 import { readFault } from './machine-fault.ts';
 import { makeFolder } from './part-files.ts';
@@ -60,8 +61,12 @@ export interface RunRecord {
   readonly combinations: number;
   /** Combinations a block covers. */
   readonly blockSize: number;
+  /** Blocks a part covers; fixed when the run begins. */
+  readonly blocksPerPart: number;
   /** Rows of the table: combinations without the skipped ones. */
   readonly rows: number;
+  /** Files of the table, once it is put together. */
+  readonly cases?: AssembledCases;
   /** Column names in their order. */
   readonly columns: readonly string[];
   /** Method by topic. */
@@ -119,6 +124,8 @@ const recordChecks: Record<keyof RunRecord, Check> = {
   status: (value) => runStatuses.some((status) => status === value),
   combinations: isCount,
   blockSize: isCount,
+  blocksPerPart: isCount,
+  cases: (value) => value === undefined || isObject(value),
   rows: isCount,
   columns: (value) => Array.isArray(value) && value.every(isText),
   methods: (value) => isObject(value) && Object.values(value as object).every(isText),

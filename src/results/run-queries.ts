@@ -57,6 +57,29 @@ export interface CaseRow {
   readonly values: Float64Array;
 }
 
+/** An axis of a factorial, by how a combination's number gives the position on it: ⌊number/stride⌋ mod size. */
+export interface AxisDigit {
+  readonly stride: number;
+  readonly size: number;
+}
+
+export interface EnvelopeOptions {
+  readonly onlyFeasible?: boolean;
+  readonly band?: BandOverride;
+}
+
+/** Least and greatest value of a figure over the rows that have it, SI. */
+export interface FigureSpan {
+  readonly least: number;
+  readonly greatest: number;
+}
+
+/** How many rows carry a label of a choice or flags figure. */
+export interface LabelCount {
+  readonly label: string;
+  readonly rows: number;
+}
+
 export interface Wanted {
   readonly want: 'less' | 'more' | 'nearest';
   /** SI; for `nearest`. */
@@ -149,29 +172,76 @@ export class RunQueries {
 
   /** What each cell of two figures (as a rule the first figures of two axes) holds. */
   async region(figureA: string, figureB: string, band?: BandOverride): Promise<RegionCells> {
+    return this.#cells(this.#sql.si(figureA), this.#sql.si(figureB), band);
+  }
+
+  /** What each cell of two axes holds; `a` and `b` are positions on them. */
+  async regionOfAxes(axisA: AxisDigit, axisB: AxisDigit, band?: BandOverride): Promise<RegionCells> {
+    return this.#cells(this.#position(axisA), this.#position(axisB), band);
+  }
+
+  async #cells(first: string, second: string, band: BandOverride | undefined): Promise<RegionCells> {
     const sql = this.#sql;
     const [a, b, studied, feasible, bestAftMargin] = await this.#numbers(
-      `SELECT ${sql.si(figureA)}, ${sql.si(figureB)}, count(*),
+      `SELECT ${first}, ${second}, count(*),
         count(*) FILTER (WHERE ${sql.feasible(band)}), max(${sql.si('static_margin_aft')})
         FROM ${sql.cases} GROUP BY 1, 2 ORDER BY 1, 2`,
     );
     return { a, b, studied, feasible, bestAftMargin };
   }
 
+  /** Position of a row on an axis, from its number. */
+  #position({ stride, size }: AxisDigit): string {
+    return `((CAST(${this.#sql.si('combination')} AS BIGINT) // ${stride}) % ${size})`;
+  }
+
   /** Envelope of a figure along another; with `onlyFeasible`, of feasible rows. */
-  async alongAxis(
-    axisFigure: string,
-    figure: string,
-    options: { readonly onlyFeasible?: boolean; readonly band?: BandOverride } = {},
-  ): Promise<AlongAxis> {
+  async alongAxis(axisFigure: string, figure: string, options: EnvelopeOptions = {}): Promise<AlongAxis> {
+    return this.#envelope(this.#sql.si(axisFigure), figure, options);
+  }
+
+  /** Envelope of a figure along an axis; `axis` holds positions on it. */
+  async alongAxisOf(axis: AxisDigit, figure: string, options: EnvelopeOptions = {}): Promise<AlongAxis> {
+    return this.#envelope(this.#position(axis), figure, options);
+  }
+
+  async #envelope(along: string, figure: string, options: EnvelopeOptions): Promise<AlongAxis> {
     const sql = this.#sql;
     const where = options.onlyFeasible === true ? `WHERE ${sql.feasible(options.band)}` : '';
     const value = sql.si(figure);
     const [axis, least, greatest, mean] = await this.#numbers(
-      `SELECT ${sql.si(axisFigure)}, min(${value}), max(${value}), avg(${value})
+      `SELECT ${along}, min(${value}), max(${value}), avg(${value})
         FROM ${sql.cases} ${where} GROUP BY 1 ORDER BY 1`,
     );
     return { axis, least, greatest, mean };
+  }
+
+  /** Spans of several figures in one pass; a figure that is empty in every row is left out. */
+  async spans(figures: readonly string[]): Promise<Map<string, FigureSpan>> {
+    if (figures.length === 0) return new Map();
+    const ends = figures.map((figure) => `min(${this.#sql.si(figure)}), max(${this.#sql.si(figure)})`);
+    const columns = await this.#numbers(`SELECT ${ends.join(', ')} FROM ${this.#sql.cases}`);
+    const spans = figures.map((figure, k) => {
+      const [least, greatest] = [columns[2 * k][0], columns[2 * k + 1][0]];
+      return [figure, { least, greatest }] as const;
+    });
+    return new Map(spans.filter(([, { least }]) => !Number.isNaN(least)));
+  }
+
+  /** Rows per label of a choice or flags figure, labels without rows left out, in the order of the labels. */
+  async labelCounts(figure: string): Promise<LabelCount[]> {
+    const column = this.#columns.find((candidate) => candidate.figure.name === figure);
+    const { kind, labels = [] } = column?.figure ?? {};
+    const [values, rows] = await this.#numbers(
+      `SELECT ${this.#sql.si(figure)} AS v, count(*) FROM ${this.#sql.cases} GROUP BY v`,
+    );
+    return labels
+      .map((label, k) => {
+        const carries = (value: number) =>
+          kind === 'flags' ? Math.floor(value / 2 ** k) % 2 === 1 : value === k;
+        return { label, rows: rows.reduce((sum, count, g) => (carries(values[g]) ? sum + count : sum), 0) };
+      })
+      .filter((counted) => counted.rows > 0);
   }
 
   /**

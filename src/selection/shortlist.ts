@@ -1,6 +1,6 @@
 import type { TableColumn } from '../figures/figure.ts';
-import type { CaseRow, RunQueries } from '../results/run-queries.ts';
 import type { BandOverride } from '../results/query-sql.ts';
+import type { CaseRow, RunQueries } from '../results/run-queries.ts';
 import type { Preference } from '../study/study.ts';
 
 /** One combination of the shortlist and why it is there. */

@@ -60,7 +60,8 @@ class BodyReader {
     this.at = new Float64Array(this.count);
     this.widths = new Float64Array(this.count);
     this.boom = body.boom;
-    for (let i = 1; i <= this.count; i++) this.reads.push(`body_stations_${i}_at`, `body_stations_${i}_width`);
+    for (let i = 1; i <= this.count; i++)
+      this.reads.push(`body_stations_${i}_at`, `body_stations_${i}_width`);
     if (this.boom) this.reads.push('body_boom_width');
   }
 

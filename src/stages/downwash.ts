@@ -62,19 +62,31 @@ export function downwashStage({ methods }: Pick<Study, 'methods'>): Stage {
       'wing_formula_sweep',
       'wing_span',
       'tail_arm',
+      'wake_length',
       'tail_above_wing_root_chord',
       'root_angle_of_attack',
       'lift_coefficient',
     ],
     writes: ['wake_height', 'downwash_torenbeek', 'downwash_handbook', 'downwash_gradient'],
     cost: 120,
-    kernel: (count, [a, ratio, A, taper, sweep, span, arm, height, alpha, cl], [wake, byT, byH, used]) => {
+    kernel: (
+      count,
+      [a, ratio, A, taper, sweep, span, arm, wakeLength, height, alpha, cl],
+      [wake, byT, byH, used],
+    ) => {
       for (let row = 0; row < count; row++) {
-        const l = arm[row] > 0 ? arm[row] : Number.NaN;
+        const l = wakeLength[row] > 0 ? arm[row] : Number.NaN;
         const b = span[row];
-        wake[row] = wakePlaneHeight(height[row], l, alpha[row], cl[row], A[row]);
+        wake[row] = wakePlaneHeight(height[row], wakeLength[row], alpha[row], cl[row], A[row]);
         byT[row] = torenbeekDownwashGradient(a[row], A[row], taper[row], (2 * l) / b, (2 * wake[row]) / b);
-        byH[row] = handbookDownwashGradient(A[row], taper[row], sweep[row], height[row] / b, l / b, ratio[row]);
+        byH[row] = handbookDownwashGradient(
+          A[row],
+          taper[row],
+          sweep[row],
+          height[row] / b,
+          l / b,
+          ratio[row],
+        );
         used[row] = useTorenbeek ? byT[row] : byH[row];
       }
     },

@@ -1,4 +1,4 @@
-import { fractionOfMac, stationOfFraction, staticMargin } from '../methods/neutral-point.ts';
+import { fractionOfMac, staticMargin, stationOfFraction } from '../methods/neutral-point.ts';
 import type { CgKind, Study } from '../study/study.ts';
 import type { Stage } from './stage.ts';
 

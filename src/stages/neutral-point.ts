@@ -82,7 +82,13 @@ export const neutralPointStage: Stage = {
     'neutral_point_height',
     'mac_leading_edge',
   ],
-  writes: ['neutral_point_wing', 'neutral_point_tail', 'neutral_point_body', 'neutral_point', 'neutral_point_station'],
+  writes: [
+    'neutral_point_wing',
+    'neutral_point_tail',
+    'neutral_point_body',
+    'neutral_point',
+    'neutral_point_station',
+  ],
   cost: 15,
   kernel: (
     count,

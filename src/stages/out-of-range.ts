@@ -2,8 +2,8 @@ import { insideAtmosphere } from '../methods/atmosphere.ts';
 import { quickBodyMomentInRange } from '../methods/body-estimates.ts';
 import { handbookInRange, torenbeekInRange } from '../methods/downwash.ts';
 import { bodyCarryOverInRange, jonesInRange } from '../methods/lift-slope.ts';
-import { insideWingTable } from '../methods/wing-table.ts';
 import { sweepTangentAt } from '../methods/planform.ts';
+import { insideWingTable } from '../methods/wing-table.ts';
 import type { Study } from '../study/study.ts';
 import type { Stage } from './stage.ts';
 
@@ -22,7 +22,10 @@ export const rangeLabels = [
 
 type RangeLabel = (typeof rangeLabels)[number];
 
-const bitOf = Object.fromEntries(rangeLabels.map((label, k) => [label, 2 ** k])) as Record<RangeLabel, number>;
+const bitOf = Object.fromEntries(rangeLabels.map((label, k) => [label, 2 ** k])) as Record<
+  RangeLabel,
+  number
+>;
 
 /** One check: the figures it reads and whether the formula is in its range. */
 interface RangeCheck {
@@ -53,7 +56,11 @@ function checksOf(study: Study): RangeCheck[] {
   ];
   if (methods.aerodynamic_centre === 'table' || methods.lift_slope === 'table') {
     checks.push(
-      { label: 'wing table (wing)', reads: wing, inside: ([A, taper, sweep]) => insideWingTable(A, taper, sweep) },
+      {
+        label: 'wing table (wing)',
+        reads: wing,
+        inside: ([A, taper, sweep]) => insideWingTable(A, taper, sweep),
+      },
       {
         label: 'wing table (tail)',
         reads: tailReads,

@@ -1,5 +1,9 @@
-import type { Study } from '../study/study.ts';
+import { bandRequirements, edgeTolerance, marginScale } from '../figures/band.ts';
+import type { Band, Requirement, Study } from '../study/study.ts';
 import type { Stage } from './stage.ts';
+
+/** Stands for the flags of formulas used outside their fitted range. */
+const inRange = 'in_range';
 
 /** One edge that a combination must keep: value ≥ limit (`sign` 1) or value ≤ limit (`sign` −1). */
 export interface RequirementEdge {
@@ -13,39 +17,34 @@ export interface RequirementEdge {
   readonly scale: number;
 }
 
-/** An edge counts as kept when it is missed by no more than this, in the figure's SI unit. */
-export const edgeTolerance = 1e-9;
+/** All edges of a study, in the order of its file, which settles ties. */
+export function requirementEdges({ requirements }: Pick<Study, 'requirements'>): RequirementEdge[] {
+  return requirements.flatMap(({ name, figure, atLeast, atMost, scale }): RequirementEdge[] => {
+    if (figure === inRange)
+      return [{ label: name, figure: 'outside_fitted_range', sign: -1, limit: 0, scale }];
+    const ofBand = name === bandRequirements.lower.name || name === bandRequirements.upper.name;
+    const label = (edge: string) => (ofBand ? name : `${name}.${edge}`);
+    return [
+      ...(atLeast === undefined
+        ? []
+        : [{ label: label('at_least'), figure, sign: 1 as const, limit: atLeast, scale }]),
+      ...(atMost === undefined
+        ? []
+        : [{ label: label('at_most'), figure, sign: -1 as const, limit: atMost, scale }]),
+    ];
+  });
+}
 
-/** One per cent of the MAC: the scale on which shortfalls of a margin are compared with others. */
-export const marginScale = 0.01;
-
-export const bandLabels = { lower: 'static_margin.at_least', upper: 'static_margin.at_most' } as const;
-
-/** All edges of a study in the order in which ties are settled: the band, then the file's order. */
-export function requirementEdges(study: Pick<Study, 'band' | 'requirements'>): RequirementEdge[] {
-  const edges: RequirementEdge[] = [];
-  const { lower, upper } = study.band;
-  if (lower !== undefined) {
-    edges.push({ label: bandLabels.lower, figure: 'static_margin_aft', sign: 1, limit: lower, scale: marginScale });
-  }
-  if (upper !== undefined) {
-    edges.push({
-      label: bandLabels.upper,
-      figure: 'static_margin_forward',
-      sign: -1,
-      limit: upper,
-      scale: marginScale,
-    });
-  }
-  for (const { name, figure, atLeast, atMost, scale } of study.requirements) {
-    if (figure === 'in_range') {
-      edges.push({ label: name, figure: 'outside_fitted_range', sign: -1, limit: 0, scale });
-      continue;
-    }
-    if (atLeast !== undefined) edges.push({ label: `${name}.at_least`, figure, sign: 1, limit: atLeast, scale });
-    if (atMost !== undefined) edges.push({ label: `${name}.at_most`, figure, sign: -1, limit: atMost, scale });
-  }
-  return edges;
+/** A study's requirements with its band replaced by another. */
+export function withOtherBand(requirements: Study['requirements'], { lower, upper }: Band): Requirement[] {
+  const others = requirements.filter(
+    ({ name }) => name !== bandRequirements.lower.name && name !== bandRequirements.upper.name,
+  );
+  return [
+    ...(lower === undefined ? [] : [{ ...bandRequirements.lower, atLeast: lower, scale: marginScale }]),
+    ...(upper === undefined ? [] : [{ ...bandRequirements.upper, atMost: upper, scale: marginScale }]),
+    ...others,
+  ];
 }
 
 /** Judges every edge: which fail, which first, by how much, and which could not be computed. */
@@ -72,7 +71,7 @@ export function requirementsStage(edges: readonly RequirementEdge[]): Stage {
               largest[row] = shortfall / scale;
               failsFirst[row] = e;
             }
-          } else if (shortfall !== shortfall) {
+          } else if (Number.isNaN(shortfall)) {
             notComputed[row] += bit;
           }
         }

@@ -116,7 +116,11 @@ export function elevatorStage({ tail }: TailStudy): Stage {
   }
   return {
     name: 'elevator',
-    reads: ['tail_elevator_chord_fraction', 'tail_elevator_span_fraction', 'tail_elevator_effectiveness_ratio'],
+    reads: [
+      'tail_elevator_chord_fraction',
+      'tail_elevator_span_fraction',
+      'tail_elevator_effectiveness_ratio',
+    ],
     writes: ['elevator_effectiveness'],
     cost: 20,
     kernel: (count, [chord, span, ratio], [tau]) => {

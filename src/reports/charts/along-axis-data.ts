@@ -68,7 +68,11 @@ function ascendingOrder(axis: PlanAxis): number[] {
   return positions.sort((p, q) => axis.values[0][p] - axis.values[0][q]);
 }
 
-function axisValues(view: RunView, axis: PlanAxis, order: readonly number[]): readonly number[] | readonly string[] {
+function axisValues(
+  view: RunView,
+  axis: PlanAxis,
+  order: readonly number[],
+): readonly number[] | readonly string[] {
   const { laidOut, study } = view;
   const figure = laidOut.figures.get(axis.figures[0]);
   if (axis.figures.length > 1 || figure === undefined) {

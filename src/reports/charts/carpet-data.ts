@@ -37,7 +37,10 @@ export function carpetData(view: RunView, figureName: string, [a, b]: [PlanAxis,
   const labels = (axis: PlanAxis) =>
     Array.from({ length: axis.size }, (_, i) => axisLabel(laidOut, axis, i, study.show));
   return {
-    heading: chartHeading(view, `Carpet of ${figureName}: ${axisWords(a)} and ${axisWords(b)} at the baseline`),
+    heading: chartHeading(
+      view,
+      `Carpet of ${figureName}: ${axisWords(a)} and ${axisWords(b)} at the baseline`,
+    ),
     a: { title: axisTitle(laidOut, a, study.show), labels: labels(a) },
     b: { title: axisTitle(laidOut, b, study.show), labels: labels(b) },
     figureTitle: figureTitle(figure, study.show),

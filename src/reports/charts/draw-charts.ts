@@ -41,7 +41,8 @@ export async function* chartsOf(view: RunView, carpet?: CarpetChoice): AsyncGene
 
   const { plan } = view.laidOut;
   const varied = plan.authorOrder.map((position) => plan.axes[position]).filter((axis) => axis.size > 1);
-  if (varied.length > 0) yield { name: 'margin-along-axes', spec: marginAlongAxis(await alongAxisData(view)) };
+  if (varied.length > 0)
+    yield { name: 'margin-along-axes', spec: marginAlongAxis(await alongAxisData(view)) };
   for (const [x, y] of pairs(varied.filter(isSliceAxis))) {
     yield { name: `slice-${fileWord(x)}-${fileWord(y)}`, spec: sliceChart(sliceData(view, x, y)) };
   }

@@ -1,9 +1,9 @@
 import type { BuildUp, MacRulerData, MacRulerRow, NeutralPointBuildUpData } from '../../charts/index.ts';
+import { baselineInputs } from '../../stages/build-stages.ts';
 import { runOnce } from '../../stages/run-once.ts';
 import { captionValue } from '../axis-text.ts';
 import type { RunView } from '../run-view.ts';
 import { chartHeading } from '../run-view.ts';
-import { baselineInputs } from '../../stages/build-stages.ts';
 import { inputsOfCombination } from '../worksheet.ts';
 
 const percent = 100;
@@ -82,11 +82,13 @@ const buildUpSteps = [
 export function buildUpData(view: RunView, picks: readonly Pick[]): NeutralPointBuildUpData {
   const withHeight = view.study.cg.heightGiven;
   const steps = buildUpSteps.filter(([, figure]) => withHeight || figure !== 'neutral_point_height');
-  const combinations = picks.map((pick): BuildUp => ({
-    label: pick.label,
-    detail: pick.detail,
-    steps: steps.map(([name, figure]) => ({ name, change: ofMac(pick, figure) })),
-    neutralPoint: ofMac(pick, 'neutral_point'),
-  }));
+  const combinations = picks.map(
+    (pick): BuildUp => ({
+      label: pick.label,
+      detail: pick.detail,
+      steps: steps.map(([name, figure]) => ({ name, change: ofMac(pick, figure) })),
+      neutralPoint: ofMac(pick, 'neutral_point'),
+    }),
+  );
   return { heading: chartHeading(view, 'Build-up of the neutral point'), combinations };
 }

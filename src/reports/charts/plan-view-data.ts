@@ -52,7 +52,10 @@ function wingOutline(study: Study, values: Values): PlanPoint[] {
   for (const panel of panelsOf(study, values)) {
     const inner = leading[leading.length - 1];
     const chord = chords[chords.length - 1];
-    leading.push({ station: inner.station + panel.tangent(chord) * panel.width, aside: inner.aside + panel.width });
+    leading.push({
+      station: inner.station + panel.tangent(chord) * panel.width,
+      aside: inner.aside + panel.width,
+    });
     chords.push(chord * panel.taper);
   }
   const trailing = leading.map(({ station, aside }, k) => ({ station: station + chords[k], aside }));
@@ -121,7 +124,10 @@ function bodyOutline({ body }: Study, values: Values, baseline: Values): PlanPoi
       tailOf(value),
       body.boom,
     );
-    return { station: value('wing_root_leading_edge') + place, aside: value(`body_stations_${i + 1}_width`) / 2 };
+    return {
+      station: value('wing_root_leading_edge') + place,
+      aside: value(`body_stations_${i + 1}_width`) / 2,
+    };
   });
   if (!body.boom) return points;
   const boom = value('body_boom_width') / 2;

@@ -2,7 +2,7 @@ import type { GridAxis, SliceChartData, SlicePick } from '../../charts/index.ts'
 import { evaluateSlice } from '../../engine/slice.ts';
 import { displayUnit } from '../../figures/display.ts';
 import type { PlanAxis } from '../../plan/plan.ts';
-import { requirementEdges } from '../../stages/requirements.ts';
+import { requirementEdges, withOtherBand } from '../../stages/requirements.ts';
 import { axisTitle } from '../axis-text.ts';
 import type { RunView } from '../run-view.ts';
 import { chartHeading, rowValue } from '../run-view.ts';
@@ -31,18 +31,22 @@ function factorOf(view: RunView, axis: PlanAxis): number {
 
 function gridAxis(view: RunView, axis: PlanAxis, values: Float64Array): GridAxis {
   const factor = factorOf(view, axis);
-  return { title: axisTitle(view.laidOut, axis, view.study.show), values: values.map((value) => value * factor) };
+  return {
+    title: axisTitle(view.laidOut, axis, view.study.show),
+    values: values.map((value) => value * factor),
+  };
 }
 
 /** Path of the number that a one-number axis varies. */
 export function pathOf(view: RunView, axis: PlanAxis): string {
-  return view.study.axes[view.laidOut.plan.authorOrder.indexOf(view.laidOut.plan.axes.indexOf(axis))].paths[0];
+  return view.study.axes[view.laidOut.plan.authorOrder.indexOf(view.laidOut.plan.axes.indexOf(axis))]
+    .paths[0];
 }
 
 /** The slice through the baseline over two axes: margin, and slack of every requirement. */
 export function sliceData(view: RunView, x: PlanAxis, y: PlanAxis): SliceChartData {
   const { study, laidOut } = view;
-  const edges = requirementEdges({ band: view.band, requirements: study.requirements });
+  const edges = requirementEdges({ requirements: withOtherBand(study.requirements, view.band) });
   const values = { x: denseValues(x, pointsPerSide), y: denseValues(y, pointsPerSide) };
   const figures = [...new Set(['static_margin_aft', ...edges.map((edge) => edge.figure)])];
   const columns = evaluateSlice(
@@ -69,10 +73,12 @@ export function sliceData(view: RunView, x: PlanAxis, y: PlanAxis): SliceChartDa
       slack: column(figure).map((value) => sign * (value - limit)),
     })),
     baseline,
-    picks: view.shortlist.map((entry): SlicePick => ({
-      x: rowValue(view, entry.row.values, x.figures[0]) * factorOf(view, x),
-      y: rowValue(view, entry.row.values, y.figures[0]) * factorOf(view, y),
-      label: `#${entry.row.combination}`,
-    })),
+    picks: view.shortlist.map(
+      (entry): SlicePick => ({
+        x: rowValue(view, entry.row.values, x.figures[0]) * factorOf(view, x),
+        y: rowValue(view, entry.row.values, y.figures[0]) * factorOf(view, y),
+        label: `#${entry.row.combination}`,
+      }),
+    ),
   };
 }

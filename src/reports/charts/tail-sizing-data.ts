@@ -24,9 +24,12 @@ export function tailSizingData(view: RunView): TailSizingData {
   const baseline = study.inputs.get(path);
   if (figure === undefined || baseline === undefined) throw new Error(`the study has no ${path}`);
   const sizes = sizeRange(view, path, baseline);
-  const slice = evaluateSlice(study, laidOut.plan.stages, [{ name: path, paths: [path], values: [sizes] }], [
-    'neutral_point',
-  ]);
+  const slice = evaluateSlice(
+    study,
+    laidOut.plan.stages,
+    [{ name: path, paths: [path], values: [sizes] }],
+    ['neutral_point'],
+  );
   const neutralPoint = slice.get('neutral_point') ?? sizes;
   const { factor } = displayUnit(figure.dimension, study.show);
   const atBaseline = runOnce(laidOut.plan.stages, baselineInputs(study));
@@ -52,7 +55,11 @@ function limitsOf(band: RunView['band'], neutralPoint: Float64Array): CgLimit[] 
     limits.push({ label: `aft limit: margin ${bandText({ lower })}`, cg: line(lower), forbidden: 'aft' });
   }
   if (upper !== undefined) {
-    limits.push({ label: `too stable: margin ${bandText({ upper })}`, cg: line(upper), forbidden: 'forward' });
+    limits.push({
+      label: `too stable: margin ${bandText({ upper })}`,
+      cg: line(upper),
+      forbidden: 'forward',
+    });
   }
   if (limits.length === 0) limits.push({ label: 'neutral point', cg: line(0), forbidden: 'aft' });
   return limits;

@@ -1,0 +1,27 @@
+import { existsSync } from 'node:fs';
+import { UsageError } from '../errors.ts';
+import { writeFileAtomically } from '../results/atomic-file.ts';
+import type { StarterKind } from '../study/starters.ts';
+import { starterStudy } from '../study/starters.ts';
+
+export interface NewArguments {
+  readonly kind: StarterKind;
+  readonly to: string | undefined;
+}
+
+/** Prints a starter study, or writes it into a file that is not there yet. */
+export async function newStudy({ kind, to }: NewArguments): Promise<void> {
+  const text = starterStudy(kind);
+  if (to === undefined) {
+    process.stdout.write(text);
+    return;
+  }
+  if (existsSync(to))
+    throw new UsageError(
+      'FILE_EXISTS',
+      `${to} is already there.`,
+      'Give another name; nothing is overwritten.',
+    );
+  writeFileAtomically(to, text);
+  process.stderr.write(`${to} is written. aftlimit check ${to} tells what it would do.\n`);
+}

@@ -1,0 +1,264 @@
+import { showValue } from '../figures/display.ts';
+import type { CaseRow, RunCounts } from '../results/run-queries.ts';
+import { defaultPreferences, preferenceText } from '../selection/shortlist.ts';
+import type { Preference } from '../study/study.ts';
+import { axisLabel, figureWords } from './axis-text.ts';
+import { cautions, notAssessed } from './cautions.ts';
+import { firstFlightCg } from './customary-ranges.ts';
+import { countText } from './number-text.ts';
+import type { RunView } from './run-view.ts';
+import { bandText, rowValue } from './run-view.ts';
+
+/** What the summary is made from, gathered beforehand. */
+export interface SummaryFacts {
+  readonly view: RunView;
+  readonly counts: RunCounts;
+  readonly closestMisses: readonly CaseRow[];
+  /** Best feasible row by each preference; absent when none is feasible. */
+  readonly best: readonly { readonly preference: Preference; readonly row: CaseRow }[];
+  /** Rows per formula used outside its fitted range, and per reason why a row is empty. */
+  readonly outsideRange: readonly { readonly label: string; readonly rows: number }[];
+  readonly notComputed: readonly { readonly label: string; readonly rows: number }[];
+  /** Notes on customary ranges and on the study's layout. */
+  readonly notes: readonly string[];
+  readonly seconds: number;
+}
+
+const percent = 100;
+
+/** The summary of a run as Markdown. */
+export function summaryMarkdown(facts: SummaryFacts): string {
+  return [
+    heading(facts),
+    answer(facts),
+    limits(facts),
+    misses(facts),
+    bestByPreference(facts),
+    shortlistTable(facts),
+    setup(facts),
+    notesSection(facts),
+    cautionsSection(facts),
+  ]
+    .filter((section) => section !== '')
+    .join('\n\n')
+    .concat('\n');
+}
+
+/** Text from a study inside Markdown: no markup of its own takes effect. */
+function plain(text: string): string {
+  return text
+    .replaceAll(/[\\`*_{}[\]<>|#]/g, (sign) => (sign === '<' ? '&lt;' : sign === '>' ? '&gt;' : `\\${sign}`))
+    .replaceAll(/\s+/g, ' ')
+    .trim();
+}
+
+function heading({ view }: SummaryFacts): string {
+  const { study, date, program } = view;
+  const powerOnly =
+    'Stick fixed, power off only: a single tractor propeller at full power costs 1–8 % MAC (common practice, no source).';
+  const body =
+    study.body === undefined
+      ? ' **No body**: the study says `body: none`, so the body’s destabilising moment is left out.'
+      : '';
+  return [
+    `# ${plain(study.title)}`,
+    ...(study.question === undefined ? [] : [`_${plain(study.question)}_`]),
+    `${date}, ${program}. ${powerOnly}${body}`,
+  ].join('\n\n');
+}
+
+function answer({ view, counts }: SummaryFacts): string {
+  const { rows, feasible } = counts;
+  const share = rows === 0 ? 0 : (percent * feasible) / rows;
+  const worst = [...counts.requirements].sort((p, q) => q.fails - p.fails)[0];
+  const limit =
+    worst === undefined || worst.fails === 0
+      ? 'No requirement rejects any of them.'
+      : `What rejects most is \`${worst.name}\`: ${countText(worst.fails)} fail it, ${countText(worst.failsAlone)} fail it alone.`;
+  return [
+    '## Answer',
+    `**${countText(feasible)} of ${countText(rows)} combinations (${share.toFixed(1)} %) meet every requirement** (static-margin band: ${bandText(view.band)}). ` +
+      `The share is of the combinations studied and depends on the ranges chosen. ${limit}`,
+    ...(feasible > 0
+      ? []
+      : [
+          `The band is not met by any combination. Without an analysis that meets it, a CG no further aft than ${percent * firstFlightCg} % MAC for a first flight is common practice (no source).`,
+        ]),
+  ].join('\n\n');
+}
+
+function limits({ counts }: SummaryFacts): string {
+  return [
+    '## What limits the others',
+    '| requirement | fails | fails alone | not computed |',
+    '|---|---:|---:|---:|',
+    ...counts.requirements.map(
+      ({ name, fails, failsAlone, notComputed }) =>
+        `| ${plain(name)} | ${countText(fails)} | ${countText(failsAlone)} | ${countText(notComputed)} |`,
+    ),
+  ].join('\n');
+}
+
+function misses({ view, closestMisses }: SummaryFacts): string {
+  if (closestMisses.length === 0) return '';
+  const fails = (row: CaseRow) => {
+    const { figure } = view.laidOut.columns.find((column) => column.figure.name === 'fails_first') ?? {};
+    return figure?.labels?.[rowValue(view, row.values, 'fails_first')] ?? '–';
+  };
+  return [
+    '## The closest misses',
+    'Shortfall over the requirement’s own scale (1 % MAC for margins).',
+    '',
+    `| no. | shortfall | fails first | ${variedTitles(view).join(' | ')} |`,
+    `|---:|---:|---|${'---:|'.repeat(variedTitles(view).length)}`,
+    ...closestMisses.map(
+      (row) =>
+        `| ${row.combination} | ${rowValue(view, row.values, 'largest_shortfall').toFixed(3)} | ${plain(fails(row))} | ${variedValues(view, row).join(' | ')} |`,
+    ),
+  ].join('\n');
+}
+
+function bestByPreference({ view, best }: SummaryFacts): string {
+  if (best.length === 0) return '';
+  const lines = best.map(({ preference, row }) => {
+    const value = shown(view, preference.figure, row);
+    return `- ${preferenceText(preference)}: ${value}, combination ${row.combination}${edgeNote(view, row)}`;
+  });
+  const assumed =
+    view.study.preferences.length === 0
+      ? `The study prefers nothing; ${preferenceText(defaultPreferences[0])} is taken, as the least tail costs least drag and mass.\n\n`
+      : '';
+  return `## Best by each preference\n\n${assumed}${lines.join('\n')}`;
+}
+
+/** Says which axes end where the best combination lies: they may end too soon. */
+function edgeNote(view: RunView, row: CaseRow): string {
+  const { plan } = view.laidOut;
+  const ends = plan.authorOrder.flatMap((position) => {
+    const axis = plan.axes[position];
+    if (axis.size < 3 || axis.figures.length > 1) return [];
+    const value = rowValue(view, row.values, axis.figures[0]);
+    const [least, greatest] = [Math.min(...axis.values[0]), Math.max(...axis.values[0])];
+    const near = (edge: number) => Math.abs(value - edge) <= 1e-9 * Math.max(1, Math.abs(edge));
+    return near(least) || near(greatest) ? [axis.name] : [];
+  });
+  return ends.length === 0
+    ? ''
+    : ` (at the end of ${ends.map((name) => `\`${name}\``).join(', ')}, which may end too soon)`;
+}
+
+const shortlistFigures = [
+  'wing_aspect_ratio',
+  'mac',
+  'tail_area',
+  'tail_volume',
+  'neutral_point',
+  'static_margin_forward',
+  'static_margin_aft',
+] as const;
+
+function shortlistTable({ view }: SummaryFacts): string {
+  if (view.shortlist.length === 0) return '';
+  const figures = shortlistFigures.filter((name) =>
+    view.laidOut.columns.some((column) => column.figure.name === name),
+  );
+  return [
+    '## Shortlist',
+    'Best by each preference in turn; combinations alike in every preferred figure are passed over. All figures: shortlist.csv; drawings: charts/.',
+    '',
+    `| no. | why | ${variedTitles(view).join(' | ')} | ${figures.map(figureWords).join(' | ')} |`,
+    `|---:|---|${'---:|'.repeat(variedTitles(view).length + figures.length)}`,
+    ...view.shortlist.map(
+      ({ row, because }) =>
+        `| ${row.combination} | ${plain(because)} | ${variedValues(view, row).join(' | ')} | ${figures.map((name) => shown(view, name, row)).join(' | ')} |`,
+    ),
+  ].join('\n');
+}
+
+function setup({ view, seconds }: SummaryFacts): string {
+  const { study, laidOut } = view;
+  const { plan } = laidOut;
+  const axes = plan.authorOrder.map((position) => {
+    const axis = plan.axes[position];
+    const values = Array.from({ length: axis.size }, (_, i) => axisLabel(laidOut, axis, i, study.show));
+    const listed =
+      values.length <= 6
+        ? values.join(', ')
+        : `${values[0]} to ${values[values.length - 1]}, ${values.length} values`;
+    return `- \`${axis.name}\`: ${listed}`;
+  });
+  const held = study.held.map(
+    ({ varied, held: kept, follows }) =>
+      `- while \`${varied}\` varies, held: ${kept.map((name) => `\`${name}\``).join(', ') || 'nothing else of its pair'}; follows: ${follows.map((name) => `\`${name}\``).join(', ') || 'nothing'}`,
+  );
+  const skips = study.skip.map(({ because }) => `- skipped: ${plain(because)}`);
+  const assumed = study.assumptions.map(({ path, value, source }) => {
+    const figure = laidOut.figures.get(path.replaceAll(/[.[\]]+/g, '_').replace(/_$/, ''));
+    const text =
+      typeof value === 'string'
+        ? plain(value)
+        : figure === undefined
+          ? String(value)
+          : showValue(value, figure.dimension, study.show);
+    return `- \`${path}\` ${text}: ${plain(source)}`;
+  });
+  const methods = Object.entries(study.methods).map(
+    ([topic, method]) => `${topic.replaceAll('_', ' ')} by ${method.replaceAll('_', ' ')}`,
+  );
+  return [
+    '## What was studied',
+    ...axes,
+    ...held,
+    ...skips,
+    '',
+    `Methods: ${methods.join('; ')}. Evaluated in ${seconds.toFixed(1)} s.`,
+    ...(assumed.length === 0 ? [] : ['', 'Assumed, because the study does not say:', '', ...assumed]),
+  ].join('\n');
+}
+
+function notesSection({ notes, outsideRange, notComputed }: SummaryFacts): string {
+  const lines = [
+    ...notes,
+    ...outsideRange.map(
+      ({ label, rows }) =>
+        `${label}: used outside its fitted range in ${countText(rows)} combinations; flagged in their rows, not rejected.`,
+    ),
+    ...notComputed.map(
+      ({ label, rows }) => `${countText(rows)} combinations could not be worked out: ${label}.`,
+    ),
+  ];
+  return lines.length === 0 ? '' : ['## Notes', ...lines.map((line) => `- ${line}`)].join('\n');
+}
+
+function cautionsSection({ view }: SummaryFacts): string {
+  const accuracy =
+    'How sure: closed formulas place the neutral point with a scatter near 3 % MAC (one standard deviation), so a band that is only just kept may not be kept in flight.';
+  const downwash =
+    view.study.methods.downwash === 'handbook'
+      ? ' The handbook’s downwash is 10–20 % low on ordinary layouts, which puts the neutral point 2–3 % MAC too far aft.'
+      : '';
+  return [
+    '## Cautions',
+    ...cautions.map((line) => `- ${line}`),
+    `- ${accuracy}${downwash}`,
+    `- ${notAssessed}`,
+  ].join('\n');
+}
+
+function variedTitles(view: RunView): string[] {
+  const { plan } = view.laidOut;
+  return plan.authorOrder.flatMap((position) => plan.axes[position].figures).map(figureWords);
+}
+
+function variedValues(view: RunView, row: CaseRow): string[] {
+  const { plan } = view.laidOut;
+  return plan.authorOrder
+    .flatMap((position) => plan.axes[position].figures)
+    .map((name) => shown(view, name, row));
+}
+
+function shown(view: RunView, name: string, row: CaseRow): string {
+  const figure = view.laidOut.figures.get(name);
+  if (figure === undefined) return '–';
+  return showValue(rowValue(view, row.values, name), figure.dimension, view.study.show);
+}
