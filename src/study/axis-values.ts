@@ -236,12 +236,14 @@ function linearValues(from: Quantity, to: Quantity, count: number): Float64Array
   const sameUnit = from.factor === to.factor;
   const [first, end, factor] = sameUnit ? [from.value, to.value, from.factor] : [from.si, to.si, 1];
   const values = new Float64Array(count);
-  // both ends are met exactly; zero inside a range must be zero, not rounding noise
+  // zero inside a range must be zero, not rounding noise
   const noise = Math.max(Math.abs(first), Math.abs(end)) * Number.EPSILON;
   for (let i = 0; i < count; i++) {
     const value = last === 0 ? first : (first * (last - i) + end * i) / last;
     values[i] = inSi(Math.abs(value) <= noise ? 0 : clean(value), factor);
   }
+  values[0] = from.si;
+  values[last] = to.si;
   return values;
 }
 
