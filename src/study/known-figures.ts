@@ -13,17 +13,19 @@ export interface KnownFigure {
 
 /** The figures of one study by name; a dotted path is taken for the name it stands for. */
 export class FigureNames {
-  readonly #byName: ReadonlyMap<string, KnownFigure>;
+  readonly #byName: ReadonlyMap<string, KnownFigure> | undefined;
 
-  constructor(figures: readonly KnownFigure[]) {
-    this.#byName = new Map(figures.map((figure) => [figure.name, figure]));
+  /** @param figures undefined where they can't be listed; then no name is found, and no fault told */
+  constructor(figures: readonly KnownFigure[] | undefined) {
+    this.#byName = figures && new Map(figures.map((figure) => [figure.name, figure]));
   }
 
   /** The figure of that name; where there is none a fault is told. */
   find(word: string, span: Span, reading: Reading): KnownFigure | undefined {
-    const found = this.#byName.get(figureNameOf(word.trim()));
-    if (found) return found;
-    const near = nearestKnown(figureNameOf(word.trim()), this.#byName.keys());
+    const name = figureNameOf(word.trim());
+    const found = this.#byName?.get(name);
+    if (found || !this.#byName) return found;
+    const near = nearestKnown(name, this.#byName.keys());
     reading.faults.add(
       'UNKNOWN_FIGURE',
       span,

@@ -122,12 +122,16 @@ function withFigures(outline: Study, root: SourceNode, knownFigures: FiguresOf, 
   return { ...outline, band, requirements, preferences, ...(columns && { columns }) };
 }
 
-function figuresOf(outline: Study, knownFigures: FiguresOf, reading: Reading): readonly KnownFigure[] {
+function figuresOf(
+  outline: Study,
+  knownFigures: FiguresOf,
+  reading: Reading,
+): readonly KnownFigure[] | undefined {
   if (reading.faults.size === 0) return knownFigures(outline);
   try {
     return knownFigures(outline);
   } catch {
     // the outline of a faulty study may be too broken to list its figures; its faults are told anyway
-    return [];
+    return undefined;
   }
 }

@@ -150,7 +150,7 @@ test('a study damaged anywhere gives a study or faults with a place inside its t
         formatStudyError(error, { color: true });
       }
     }),
-    { numRuns: 1500 },
+    { numRuns: 600 },
   );
 }, 120_000);
 
@@ -171,6 +171,6 @@ test('a value exchanged for any other gives a study or faults', () => {
         if (!(error instanceof StudyError)) throw error;
       }
     }),
-    { numRuns: 1000 },
+    { numRuns: 400 },
   );
 }, 120_000);

@@ -173,7 +173,10 @@ test('a list of figures that fails on a faulty study hides none of its faults', 
     throw new RangeError('no such input');
   };
   expect(() => readStudy(edited(['9.4 m', '9.4']), 'base.yaml', fails)).toThrow(
-    expect.objectContaining({ name: 'StudyError' }),
+    expect.objectContaining({
+      name: 'StudyError',
+      faults: [expect.objectContaining({ code: 'MISSING_UNIT' })],
+    }),
   );
   expect(() => readStudy(baseStudy, 'base.yaml', fails)).toThrow(RangeError);
 });
