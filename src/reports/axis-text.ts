@@ -53,13 +53,25 @@ export function axisLabel(laidOut: LaidOut, axis: PlanAxis, position: number, sh
 }
 
 export function plainNumber(value: number): string {
-  return Number.isNaN(value) ? '–' : String(Number(value.toFixed(decimals)));
+  return Number.isNaN(value) ? '–' : String(Number(value.toFixed(decimals))).replace('-', '−');
+}
+
+/** An axis inside a sentence: `tail arm`, `CG range`. */
+export function axisWords(axis: PlanAxis): string {
+  if (axis.name === 'cg') return 'CG range';
+  return axis.figures.map(figureInSentence).join(' with ');
+}
+
+/** A figure inside a sentence: `tail area`, `CG forward`. */
+export function figureInSentence(name: string): string {
+  const words = figureWords(name);
+  return /^[A-Z][a-z]/.test(words) ? words.charAt(0).toLowerCase() + words.slice(1) : words;
 }
 
 /** One figure's value for a caption: `span 9.4 m`. */
 export function captionValue(figure: Figure, value: number, show: ShowSystem): string {
   const { unit, factor } = displayUnit(figure.dimension, show);
   const text = plainNumber(value * factor);
-  if (unit === '' || unit === '°') return `${figureWords(figure.name).toLowerCase()} ${text}${unit}`;
-  return `${figureWords(figure.name).toLowerCase()} ${text} ${unit}`;
+  if (unit === '' || unit === '°') return `${figureInSentence(figure.name)} ${text}${unit}`;
+  return `${figureInSentence(figure.name)} ${text} ${unit}`;
 }

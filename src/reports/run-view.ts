@@ -1,5 +1,6 @@
 import type { ChartHeading } from '../charts/index.ts';
 import type { LaidOut } from '../engine/lay-out.ts';
+import { showValue } from '../figures/display.ts';
 import type { RunQueries } from '../results/run-queries.ts';
 import type { Shortlisted } from '../selection/shortlist.ts';
 import type { Band, Study } from '../study/study.ts';
@@ -42,4 +43,12 @@ export function bandText({ lower, upper }: Band): string {
 export function rowValue(view: RunView, values: ArrayLike<number>, figure: string): number {
   const place = view.laidOut.columns.findIndex((column) => column.figure.name === figure);
   return place < 0 ? Number.NaN : values[place];
+}
+
+/** Text of a figure's value as the study shows it: `9.400 m`. */
+export function valueShower(study: Study, { figures }: LaidOut): (figure: string, value: number) => string {
+  return (name, value) => {
+    const figure = figures.get(name);
+    return figure === undefined ? String(value) : showValue(value, figure.dimension, study.show);
+  };
 }

@@ -7,7 +7,7 @@ import { cautions, notAssessed } from './cautions.ts';
 import { firstFlightCg } from './customary-ranges.ts';
 import { countText } from './number-text.ts';
 import type { RunView } from './run-view.ts';
-import { bandText, rowValue } from './run-view.ts';
+import { bandText, rowValue, valueShower } from './run-view.ts';
 
 /** What the summary is made from, gathered beforehand. */
 export interface SummaryFacts {
@@ -21,7 +21,6 @@ export interface SummaryFacts {
   readonly notComputed: readonly { readonly label: string; readonly rows: number }[];
   /** Notes on customary ranges and on the study's layout. */
   readonly notes: readonly string[];
-  readonly seconds: number;
 }
 
 const percent = 100;
@@ -94,7 +93,7 @@ function limits({ counts }: SummaryFacts): string {
     '|---|---:|---:|---:|',
     ...counts.requirements.map(
       ({ name, fails, failsAlone, notComputed }) =>
-        `| ${plain(name)} | ${countText(fails)} | ${countText(failsAlone)} | ${countText(notComputed)} |`,
+        `| \`${name}\` | ${countText(fails)} | ${countText(failsAlone)} | ${countText(notComputed)} |`,
     ),
   ].join('\n');
 }
@@ -113,20 +112,26 @@ function misses({ view, closestMisses }: SummaryFacts): string {
     `|---:|---:|---|${'---:|'.repeat(variedTitles(view).length)}`,
     ...closestMisses.map(
       (row) =>
-        `| ${row.combination} | ${rowValue(view, row.values, 'largest_shortfall').toFixed(3)} | ${plain(fails(row))} | ${variedValues(view, row).join(' | ')} |`,
+        `| ${row.combination} | ${shortfallText(rowValue(view, row.values, 'largest_shortfall'))} | \`${fails(row)}\` | ${variedValues(view, row).join(' | ')} |`,
     ),
   ].join('\n');
 }
 
+/** Two digits, however small: a miss by a hair is not a miss by nothing. */
+function shortfallText(shortfall: number): string {
+  return shortfall < 0.01 ? shortfall.toExponential(1) : shortfall.toPrecision(2);
+}
+
 function bestByPreference({ view, best }: SummaryFacts): string {
   if (best.length === 0) return '';
+  const show = valueShower(view.study, view.laidOut);
   const lines = best.map(({ preference, row }) => {
     const value = shown(view, preference.figure, row);
-    return `- ${preferenceText(preference)}: ${value}, combination ${row.combination}${edgeNote(view, row)}`;
+    return `- ${preferenceText(preference, show)}: ${value}, combination ${row.combination}${edgeNote(view, row)}`;
   });
   const assumed =
     view.study.preferences.length === 0
-      ? `The study prefers nothing; ${preferenceText(defaultPreferences[0])} is taken, as the least tail costs least drag and mass.\n\n`
+      ? `The study prefers nothing; ${preferenceText(defaultPreferences[0], show)} is taken, as the least tail costs least drag and mass.\n\n`
       : '';
   return `## Best by each preference\n\n${assumed}${lines.join('\n')}`;
 }
@@ -159,23 +164,33 @@ const shortlistFigures = [
 
 function shortlistTable({ view }: SummaryFacts): string {
   if (view.shortlist.length === 0) return '';
-  const figures = shortlistFigures.filter((name) =>
-    view.laidOut.columns.some((column) => column.figure.name === name),
-  );
+  const varied = variedFigures(view);
+  const figures = shortlistFigures.filter((name) => hasColumn(view, name) && !varied.includes(name));
+  const flagged = hasColumn(view, 'outside_fitted_range');
   return [
     '## Shortlist',
     'Best by each preference in turn; combinations alike in every preferred figure are passed over. All figures: shortlist.csv; drawings: charts/.',
     '',
-    `| no. | why | ${variedTitles(view).join(' | ')} | ${figures.map(figureWords).join(' | ')} |`,
-    `|---:|---|${'---:|'.repeat(variedTitles(view).length + figures.length)}`,
+    `| no. | why | ${variedTitles(view).join(' | ')} | ${figures.map(figureWords).join(' | ')} |${flagged ? ' outside its fitted range |' : ''}`,
+    `|---:|---|${'---:|'.repeat(variedTitles(view).length + figures.length)}${flagged ? '---|' : ''}`,
     ...view.shortlist.map(
       ({ row, because }) =>
-        `| ${row.combination} | ${plain(because)} | ${variedValues(view, row).join(' | ')} | ${figures.map((name) => shown(view, name, row)).join(' | ')} |`,
+        `| ${row.combination} | ${plain(because)} | ${variedValues(view, row).join(' | ')} | ${figures.map((name) => shown(view, name, row)).join(' | ')} |${flagged ? ` ${flagsOf(view, row)} |` : ''}`,
     ),
   ].join('\n');
 }
 
-function setup({ view, seconds }: SummaryFacts): string {
+function flagsOf(view: RunView, row: CaseRow): string {
+  const labels = view.laidOut.figures.get('outside_fitted_range')?.labels ?? [];
+  const set = rowValue(view, row.values, 'outside_fitted_range');
+  return labels.filter((_, bit) => Math.floor(set / 2 ** bit) % 2 === 1).join('; ') || 'none';
+}
+
+function hasColumn(view: RunView, name: string): boolean {
+  return view.laidOut.columns.some((column) => column.figure.name === name);
+}
+
+function setup({ view }: SummaryFacts): string {
   const { study, laidOut } = view;
   const { plan } = laidOut;
   const axes = plan.authorOrder.map((position) => {
@@ -189,7 +204,7 @@ function setup({ view, seconds }: SummaryFacts): string {
   });
   const held = study.held.map(
     ({ varied, held: kept, follows }) =>
-      `- while \`${varied}\` varies, held: ${kept.map((name) => `\`${name}\``).join(', ') || 'nothing else of its pair'}; follows: ${follows.map((name) => `\`${name}\``).join(', ') || 'nothing'}`,
+      `- while \`${varied}\` varies, held: ${kept.join(', ') || 'nothing else'}; follows: ${follows.join(', ') || 'nothing'}`,
   );
   const skips = study.skip.map(({ because }) => `- skipped: ${plain(because)}`);
   const assumed = study.assumptions.map(({ path, value, source }) => {
@@ -211,7 +226,7 @@ function setup({ view, seconds }: SummaryFacts): string {
     ...held,
     ...skips,
     '',
-    `Methods: ${methods.join('; ')}. Evaluated in ${seconds.toFixed(1)} s.`,
+    `Methods: ${methods.join('; ')}.`,
     ...(assumed.length === 0 ? [] : ['', 'Assumed, because the study does not say:', '', ...assumed]),
   ].join('\n');
 }
@@ -245,16 +260,18 @@ function cautionsSection({ view }: SummaryFacts): string {
   ].join('\n');
 }
 
+/** Varied numbers in the author's order. */
+function variedFigures({ laidOut }: RunView): string[] {
+  const { plan } = laidOut;
+  return plan.authorOrder.flatMap((position) => plan.axes[position].figures);
+}
+
 function variedTitles(view: RunView): string[] {
-  const { plan } = view.laidOut;
-  return plan.authorOrder.flatMap((position) => plan.axes[position].figures).map(figureWords);
+  return variedFigures(view).map(figureWords);
 }
 
 function variedValues(view: RunView, row: CaseRow): string[] {
-  const { plan } = view.laidOut;
-  return plan.authorOrder
-    .flatMap((position) => plan.axes[position].figures)
-    .map((name) => shown(view, name, row));
+  return variedFigures(view).map((name) => shown(view, name, row));
 }
 
 function shown(view: RunView, name: string, row: CaseRow): string {

@@ -1,7 +1,7 @@
 import { readdirSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import type { LaidOut } from '../engine/lay-out.ts';
-import { displayUnit, showValue, tableColumn } from '../figures/display.ts';
+import { displayUnit, tableColumn } from '../figures/display.ts';
 import type { TableColumn } from '../figures/figure.ts';
 import { writeFileAtomically } from '../results/atomic-file.ts';
 import { writeDataPackage } from '../results/data-package.ts';
@@ -17,6 +17,7 @@ import type { CarpetChoice } from './charts/draw-charts.ts';
 import type { Span } from './customary-ranges.ts';
 import { customaryNotes } from './customary-ranges.ts';
 import type { RunView } from './run-view.ts';
+import { valueShower } from './run-view.ts';
 import type { SummaryFacts } from './summary.ts';
 import { summaryMarkdown } from './summary.ts';
 
@@ -42,7 +43,7 @@ export async function writeReports(request: ReportRequest): Promise<RunCounts> {
     const counts = await queries.counts();
     if (request.charts) await drawCharts(view, runPaths(folder).charts);
     await writeShortlist(view, folder);
-    writeFileAtomically(runPaths(folder).summary, summaryMarkdown(await gatherFacts(view, counts, record)));
+    writeFileAtomically(runPaths(folder).summary, summaryMarkdown(await gatherFacts(view, counts)));
     writeDataPackage(folder, {
       title: study.title,
       version: record.version,
@@ -75,7 +76,14 @@ async function viewRun(
   { study, laidOut, record, otherBand }: ReportRequest,
   queries: RunQueries,
 ): Promise<RunView> {
-  const shortlist = await chooseShortlist(queries, laidOut.columns, study.preferences, study.keep, otherBand);
+  const shortlist = await chooseShortlist(
+    queries,
+    laidOut.columns,
+    study.preferences,
+    study.keep,
+    valueShower(study, laidOut),
+    otherBand,
+  );
   return {
     study,
     laidOut,
@@ -129,7 +137,7 @@ async function writeShortlist(view: RunView, folder: string): Promise<void> {
   );
 }
 
-async function gatherFacts(view: RunView, counts: RunCounts, record: RunRecord): Promise<SummaryFacts> {
+async function gatherFacts(view: RunView, counts: RunCounts): Promise<SummaryFacts> {
   const { study, queries, laidOut } = view;
   const preferences = study.preferences.length === 0 ? defaultPreferences : study.preferences;
   const best: SummaryFacts['best'][number][] = [];
@@ -141,10 +149,7 @@ async function gatherFacts(view: RunView, counts: RunCounts, record: RunRecord):
   const notes = customaryNotes({
     ...(study.aircraftClass === undefined ? {} : { aircraftClass: study.aircraftClass }),
     spans,
-    show: (name, value) => {
-      const figure = laidOut.figures.get(name);
-      return figure === undefined ? String(value) : showValue(value, figure.dimension, study.show);
-    },
+    show: valueShower(study, laidOut),
   });
   const has = (name: string) => laidOut.columns.some((column) => column.figure.name === name);
   return {
@@ -155,7 +160,6 @@ async function gatherFacts(view: RunView, counts: RunCounts, record: RunRecord):
     outsideRange: has('outside_fitted_range') ? await queries.labelCounts('outside_fitted_range') : [],
     notComputed: has('not_computed_because') ? await queries.labelCounts('not_computed_because') : [],
     notes: [...notes, ...travelNotes(view, spans)],
-    seconds: record.seconds,
   };
 }
 

@@ -26,6 +26,7 @@ export async function chooseShortlist(
   columns: readonly TableColumn[],
   preferences: readonly Preference[],
   keep: number,
+  show: (figure: string, value: number) => string,
   band?: BandOverride,
 ): Promise<Shortlisted[]> {
   const preferred = preferences.length === 0 ? defaultPreferences : preferences;
@@ -44,7 +45,7 @@ export async function chooseShortlist(
     idle = row === undefined ? idle + 1 : 0;
     if (row === undefined) continue;
     rank[p]++;
-    chosen.push({ row, because: `${ordinal(rank[p])} by ${preferenceText(preferred[p])}` });
+    chosen.push({ row, because: `${ordinal(rank[p])} by ${preferenceText(preferred[p], show)}` });
   }
   return chosen;
 }
@@ -67,10 +68,14 @@ function nextUnlike(
   return undefined;
 }
 
-export function preferenceText({ figure, want }: Preference): string {
+/** A preference in words; `show` gives the value sought as text. */
+export function preferenceText(
+  { figure, want, nearest }: Preference,
+  show: (figure: string, value: number) => string,
+): string {
   if (want === 'less') return `least ${figure}`;
   if (want === 'more') return `most ${figure}`;
-  return `${figure} nearest to the value sought`;
+  return `${figure} nearest to ${show(figure, nearest ?? Number.NaN)}`;
 }
 
 function ordinal(rank: number): string {

@@ -2,10 +2,9 @@ import type { CarpetPlotData } from '../../charts/index.ts';
 import { evaluateSlice } from '../../engine/slice.ts';
 import { displayUnit } from '../../figures/display.ts';
 import type { PlanAxis } from '../../plan/plan.ts';
-import { axisLabel, axisTitle, figureTitle } from '../axis-text.ts';
+import { axisLabel, axisTitle, figureInSentence, figureTitle } from '../axis-text.ts';
 import type { RunView } from '../run-view.ts';
 import { chartHeading } from '../run-view.ts';
-import { axisWords } from './region-data.ts';
 import { isSliceAxis } from './slice-data.ts';
 
 export const carpetFigure = 'static_margin_aft';
@@ -37,10 +36,7 @@ export function carpetData(view: RunView, figureName: string, [a, b]: [PlanAxis,
   const labels = (axis: PlanAxis) =>
     Array.from({ length: axis.size }, (_, i) => axisLabel(laidOut, axis, i, study.show));
   return {
-    heading: chartHeading(
-      view,
-      `Carpet of ${figureName}: ${axisWords(a)} and ${axisWords(b)} at the baseline`,
-    ),
+    heading: chartHeading(view, `Carpet of ${figureInSentence(figureName)} at the baseline`),
     a: { title: axisTitle(laidOut, a, study.show), labels: labels(a) },
     b: { title: axisTitle(laidOut, b, study.show), labels: labels(b) },
     figureTitle: figureTitle(figure, study.show),

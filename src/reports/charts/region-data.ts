@@ -1,6 +1,6 @@
 import type { CellAxis, RegionMapData } from '../../charts/index.ts';
 import type { PlanAxis } from '../../plan/plan.ts';
-import { axisLabel, axisTitle } from '../axis-text.ts';
+import { axisLabel, axisTitle, axisWords } from '../axis-text.ts';
 import type { RunView } from '../run-view.ts';
 import { chartHeading } from '../run-view.ts';
 
@@ -39,8 +39,4 @@ export async function regionData(view: RunView, x: PlanAxis, y: PlanAxis): Promi
 export function axisDigit(axes: readonly PlanAxis[], axis: PlanAxis): { stride: number; size: number } {
   const faster = axes.slice(axes.indexOf(axis) + 1);
   return { stride: faster.reduce((product, { size }) => product * size, 1), size: axis.size };
-}
-
-export function axisWords(axis: PlanAxis): string {
-  return axis.name === 'cg' ? 'CG range' : axis.name;
 }

@@ -3,10 +3,9 @@ import { evaluateSlice } from '../../engine/slice.ts';
 import { displayUnit } from '../../figures/display.ts';
 import type { PlanAxis } from '../../plan/plan.ts';
 import { requirementEdges, withOtherBand } from '../../stages/requirements.ts';
-import { axisTitle } from '../axis-text.ts';
+import { axisTitle, axisWords } from '../axis-text.ts';
 import type { RunView } from '../run-view.ts';
 import { chartHeading, rowValue } from '../run-view.ts';
-import { axisWords } from './region-data.ts';
 
 /** Points along each side of a slice: smooth contours at a small cost. */
 const pointsPerSide = 61;
