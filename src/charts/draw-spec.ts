@@ -63,17 +63,26 @@ interface TextItem {
   readonly fontWeight?: number | string;
 }
 
+let lastDrawn: Promise<unknown> = Promise.resolve();
+
 /**
  * The chart as SVG text. The same specification gives the same bytes.
  * @param warnings receives what Vega-Lite and Vega warn of; they are otherwise silent
  */
-export async function drawSvg(spec: ChartSpec, warnings: string[] = []): Promise<string> {
+export function drawSvg(spec: ChartSpec, warnings: string[] = []): Promise<string> {
+  // One after another: clip and gradient names come from a counter that all drawings share.
+  const drawn = lastDrawn.then(() => drawOne(spec, warnings));
+  lastDrawn = drawn.catch(() => undefined);
+  return drawn;
+}
+
+async function drawOne(spec: ChartSpec, warnings: string[]): Promise<string> {
   const { vega, vegaLite } = await loadDrawing();
   const logger = quietLogger(warnings);
   const compiled = vegaLite.compile(spec, { logger }).spec;
   const view = new vega.View(vega.parse(compiled), { renderer: 'none', loader: refusingLoader, logger });
   try {
-    // Clip and gradient names count upward for the life of the process; reset, they depend on the chart alone.
+    // That counter runs for the life of the process; set back, names depend on the chart alone.
     (vega as unknown as { resetSVGDefIds: () => void }).resetSVGDefIds();
     return (await view.toSVG()).replace('<svg ', '<svg style="font-variant-numeric: tabular-nums" ');
   } finally {
@@ -83,8 +92,9 @@ export async function drawSvg(spec: ChartSpec, warnings: string[] = []): Promise
 
 /** The SVG as a PNG picture, drawn with the shipped font files only, so that every machine draws the same. */
 export async function drawPng(svg: string): Promise<Uint8Array> {
-  const { Resvg } = await import('@resvg/resvg-js');
-  const picture = new Resvg(svg, {
+  const { renderAsync } = await import('@resvg/resvg-js');
+  // Drawn on a thread of its own, so that several pictures can be drawn side by side.
+  const picture = await renderAsync(svg, {
     background: colours.paper,
     fitTo: { mode: 'zoom', value: pictureScale },
     font: {
@@ -95,7 +105,7 @@ export async function drawPng(svg: string): Promise<Uint8Array> {
     },
     logLevel: 'off',
   });
-  return picture.render().asPng();
+  return picture.asPng();
 }
 
 function fontFiles(): string[] {

@@ -1,6 +1,6 @@
 import { spread } from './geometry/spread.ts';
 import { type KeyItem, keyRow } from './key-row.ts';
-import { bars, type Label, type Layer, labels, points, type Segment, segments } from './marks.ts';
+import { bars, type Label, type Layer, labels, mergeAlike, points, type Segment, segments } from './marks.ts';
 import { panel, type Scale } from './panel.ts';
 import { type ChartHeading, type ChartSpec, sheet } from './sheet.ts';
 import { ellipsize, numberText, textWidth } from './text-width.ts';
@@ -43,7 +43,7 @@ const quarterLine = { color: colours.ink, width: 1 } as const;
 export function macRuler(data: MacRulerData): ChartSpec {
   const x = chordScale(data.rows);
   const height = data.rows.length * lane.row;
-  const layers = data.rows.flatMap((row, index) => rowLayers(row, index * lane.row, x));
+  const layers = mergeAlike(data.rows.flatMap((row, index) => rowLayers(row, index * lane.row, x)));
   return sheet(data.heading, width + 30, [
     keyRow(keyItems(), width),
     panel({ width, height, x, y: 'pixels', layers, framed: false }),
@@ -102,7 +102,7 @@ function rowLayers(row: MacRulerRow, top: number, x: Scale): Layer[] {
   return [
     bars([{ x: 0, x2: 100, ...strip }], { fill: colours.wash, stroke: colours.rule }),
     segments([{ x: quarterMac, x2: quarterMac, y: strip.y - 1, y2: strip.y2 + 1 }], quarterLine),
-    bars([{ ...cgBar(row, x), y: strip.y + inset, y2: strip.y2 - inset }], { fill: colours.accent }),
+    bars(known([{ ...cgBar(row, x), y: strip.y + inset, y2: strip.y2 - inset }]), { fill: colours.accent }),
     points(known([{ x: row.aerodynamicCentre, y: strip.y2 + 2 }]), centreMark),
     points(known([{ x: row.neutralPoint, y: middle }]), neutralPointMark),
     ...windowLayers(row, top, x),
@@ -119,7 +119,7 @@ function cgBar({ cg }: MacRulerRow, x: Scale): { x: number; x2: number } {
   return { x: Math.min(cg.forward, middle - thin), x2: Math.max(cg.aft, middle + thin) };
 }
 
-function known(positions: readonly { x: number; y: number }[]) {
+function known<T extends { x: number }>(positions: readonly T[]): T[] {
   return positions.filter((position) => Number.isFinite(position.x));
 }
 
@@ -127,15 +127,12 @@ const nameGap = 10;
 function nameLayers({ label, detail }: MacRulerRow, top: number, x: Scale): Layer[] {
   const name = ellipsize(label, width / 3, textSize.label, weight.strong);
   const dx = textWidth(name, textSize.label, weight.strong) + nameGap;
-  const at = { x: x.from, y: top + lane.name };
+  const y = top + lane.name;
+  const after = x.from + (dx / width) * (x.to - x.from);
+  const words = ellipsize(detail, width - dx, textSize.small);
   return [
-    labels([{ ...at, text: name }], { weight: weight.strong, align: 'left' }),
-    labels([{ ...at, text: ellipsize(detail, width - dx, textSize.small) }], {
-      size: textSize.small,
-      color: colours.muted,
-      align: 'left',
-      dx,
-    }),
+    labels([{ x: x.from, y, text: name }], { weight: weight.strong, align: 'left' }),
+    labels([{ x: after, y, text: words }], { size: textSize.small, color: colours.muted, align: 'left' }),
   ];
 }
 
@@ -148,19 +145,10 @@ function windowLayers({ window }: MacRulerRow, top: number, x: Scale): Layer[] {
   const start = from ?? x.from;
   const end = to ?? x.to;
   if (!Number.isFinite(start) || !Number.isFinite(end)) return [];
+  const style = { size: textSize.small, color: colours.accentDark };
   if (start > end) {
-    return [
-      labels(
-        [
-          {
-            x: x.from,
-            y,
-            text: `CG window empty: it would run from ${numberText(start, 1)} to ${numberText(end, 1)} %`,
-          },
-        ],
-        { size: textSize.small, align: 'left', color: colours.accentDark },
-      ),
-    ];
+    const said = `CG window empty: it would run from ${numberText(start, 1)} to ${numberText(end, 1)} %`;
+    return [labels([{ x: x.from, y, text: said }], { ...style, align: 'left' })];
   }
   const rows: Segment[] = [{ x: start, x2: end, y, y2: y }];
   if (from !== undefined) rows.push({ x: from, x2: from, y, y2: foot });
@@ -172,8 +160,7 @@ function windowLayers({ window }: MacRulerRow, top: number, x: Scale): Layer[] {
   return [
     segments(rows, bracketLine),
     labels([{ x: right ? end : start, y, text }], {
-      size: textSize.small,
-      color: colours.accentDark,
+      ...style,
       align: right ? 'left' : 'right',
       dx: right ? 6 : -6,
     }),

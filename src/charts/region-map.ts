@@ -66,16 +66,16 @@ export function regionMap(data: RegionMapData): ChartSpec {
   return sheet(
     data.heading,
     width,
-    [plots, keyRow(keyItems(share, margin), width)],
+    [plots, keyRow(keyItems(share, margin, numbersFit(size, margin)), width)],
     [`Share of the ${count} combinations studied; depends on the ranges chosen`],
   );
 }
 
-function keyItems(share: readonly Cell[], margin: readonly Cell[]): KeyItem[] {
+function keyItems(share: readonly Cell[], margin: readonly Cell[], printed: boolean): KeyItem[] {
   const items: KeyItem[] = [];
   if (share.some(({ mark }) => mark === 'cross'))
     items.push({ symbol: { kind: 'cross' }, text: 'no feasible combination' });
-  if (margin.some(({ mark }) => mark === 'dash'))
+  if (!printed && margin.some(({ mark }) => mark === 'dash'))
     items.push({ symbol: { kind: 'point', point: dashMark(10) }, text: 'negative margin' });
   if ([...share, ...margin].some(({ value }) => value === null)) {
     items.push({

@@ -8,7 +8,7 @@ import {
 } from '../../src/charts/index.ts';
 import { axis, buildUp, carpet, heading, outline, region, rulerRow, slice, tail } from './samples.ts';
 
-/** Small inputs whose whole specification is kept; a change of any chart shows as a change of its file. */
+/** Small inputs whose whole specification is kept as text (not `.json`, which the formatter would rewrite); a change of any chart shows as a change of its file. */
 const small: Readonly<Record<string, () => ChartSpec>> = {
   'region-map': () =>
     region(
@@ -32,5 +32,5 @@ const small: Readonly<Record<string, () => ChartSpec>> = {
 };
 
 it.each(Object.entries(small))('%s', async (name, chart) => {
-  await expect(`${JSON.stringify(chart(), null, 1)}\n`).toMatchFileSnapshot(`./golden/${name}.vl.json`);
+  await expect(`${JSON.stringify(chart(), null, 1)}\n`).toMatchFileSnapshot(`./golden/${name}.golden`);
 });

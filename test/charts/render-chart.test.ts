@@ -61,6 +61,14 @@ describe('files of a chart', () => {
     }
   });
 
+  it('have the same bytes when many are drawn at once', async () => {
+    const charts = ['One', 'Two', 'Three', 'Four'].map((title) => chart({ ...heading, title }));
+    const alone: string[] = [];
+    for (const spec of charts) alone.push(await drawSvg(spec));
+    expect(await Promise.all(charts.map((spec) => drawSvg(spec)))).toEqual(alone);
+    expect(alone[0]).toContain('url(#gradient_0)');
+  });
+
   it('are only those asked for', async () => {
     await renderChart('region', chart(), folder, ['svg']);
     expect(await readdir(folder)).toEqual(['region.svg']);

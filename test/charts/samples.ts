@@ -336,6 +336,7 @@ export const everyChart: Readonly<Record<string, () => ChartSpec>> = {
           window: { to: 1 },
         }),
         rulerRow(3, { window: { from: 22 }, detail: 'x'.repeat(200) }),
+        rulerRow(5, { cg: { forward: Number.NaN, aft: Number.NaN } }),
         rulerRow(4, {
           neutralPoint: Number.NaN,
           window: { from: Number.NaN, to: 3 },

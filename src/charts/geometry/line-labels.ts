@@ -108,5 +108,11 @@ export function inside(
 }
 
 export function isClear(spot: Spot, taken: readonly Spot[]): boolean {
-  return taken.every((other) => Math.hypot(spot.x - other.x, spot.y - other.y) >= spot.radius + other.radius);
+  for (const other of taken) {
+    const dx = spot.x - other.x;
+    const dy = spot.y - other.y;
+    const apart = spot.radius + other.radius;
+    if (dx * dx + dy * dy < apart * apart) return false;
+  }
+  return true;
 }
