@@ -3,9 +3,10 @@ import { defineConfig } from 'vitest/config';
 export default defineConfig({
   test: {
     include: ['test/**/*.test.ts'],
-    testTimeout: 60_000,
-    hookTimeout: 60_000,
-    // Worker threads and child processes of the program itself run inside tests.
+    testTimeout: 120_000,
+    hookTimeout: 120_000,
+    // Tests start worker threads and whole runs of the program; each file gets a process of its own.
     pool: 'forks',
+    reporters: ['default', './test/counts-reporter.ts'],
   },
 });
