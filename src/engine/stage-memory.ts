@@ -40,7 +40,7 @@ export class StageMemory {
     const { suffixStart, chunks } = tiles.shape;
     this.space = tiles.runningAxes(axes);
     this.entries = this.space.reduce((product, axis) => product * tiles.lengthInTile(axis), 1);
-    this.ownPrefix = [...Array(suffixStart).keys()].filter((axis) => axes & (1 << axis));
+    this.ownPrefix = [...Array(suffixStart).keys()].filter((axis) => axes.has(axis));
     this.usesChunk = chunks > 1 && this.space.length > 0;
     this.perRow = this.space.length === tiles.allRunning().length && this.ownPrefix.length === suffixStart;
 
@@ -69,6 +69,8 @@ export class StageMemory {
     if (this.slotKeys[slot] !== key) {
       for (let k = 0; k < this.sources.length; k++) this.gatherShared(k);
       this.slots[slot] ??= this.newColumns();
+      // A kernel that throws leaves the slot half written: it must not pass for its old setting.
+      this.slotKeys[slot] = notEvaluated;
       this.stage.kernel(this.entries, this.inputs, this.slots[slot]);
       this.slotKeys[slot] = key;
     }

@@ -71,20 +71,16 @@ export class Tiles {
 
   /** Axes among `axes` that run inside the tile, slowest first. */
   runningAxes(axes: AxisSet): number[] {
-    const running: number[] = [];
-    for (let axis = this.shape.suffixStart; axis < this.plan.axes.length; axis++) {
-      if (axes & (1 << axis)) running.push(axis);
-    }
-    return running;
+    return this.allRunning().filter((axis) => axes.has(axis));
   }
 
   /** Length of an axis inside a tile. */
   readonly lengthInTile = (axis: number): number =>
     this.shape.chunks === 1 ? this.plan.axes[axis].size : this.shape.rows;
 
-  /** Every axis that runs inside the tile. */
+  /** Every axis that runs inside the tile, slowest first. */
   allRunning(): number[] {
-    return this.runningAxes(~0);
+    return [...this.plan.axes.keys()].slice(this.shape.suffixStart);
   }
 
   declare(name: string, values: Float64Array, space: readonly number[], compact = false): FigureSource {

@@ -1,9 +1,7 @@
 import type { Stage } from '../stages/stage.ts';
 
-/** Which axes a figure or stage depends on, as a bit set over axis positions (≤ 30 axes). */
-export type AxisSet = number;
-
-export const maximumAxes = 30;
+/** Positions of the axes that a figure or stage depends on. */
+export type AxisSet = ReadonlySet<number>;
 
 /**
  * Follows the figures from the varied inputs through the stages.
@@ -19,14 +17,14 @@ export function axesOfStages(
   const ofFigure = new Map<string, AxisSet>();
   for (const name of inputs) {
     const axis = inputAxis.get(name);
-    ofFigure.set(name, axis === undefined ? 0 : 1 << axis);
+    ofFigure.set(name, new Set(axis === undefined ? [] : [axis]));
   }
   const ofStage = stages.map((stage) => {
-    let axes = 0;
+    const axes = new Set<number>();
     for (const name of stage.reads) {
       const known = ofFigure.get(name);
       if (known === undefined) throw new Error(`stage ${stage.name} reads ${name}, which nothing wrote`);
-      axes |= known;
+      for (const axis of known) axes.add(axis);
     }
     for (const name of stage.writes) {
       if (name === null) continue;

@@ -42,7 +42,7 @@ export function odometerCost(
     let product = 1;
     for (const axis of order) {
       product *= sizes[axis];
-      if (axes & (1 << axis)) evaluations = product;
+      if (axes.has(axis)) evaluations = product;
     }
     total += evaluations * cost;
   }
@@ -52,7 +52,7 @@ export function odometerCost(
 /** For many axes: the axis whose dependent stages cost most together changes slowest. */
 function orderByDependentCost(author: readonly number[], stages: readonly CostedStage[]): number[] {
   const dependentCost = (axis: number) =>
-    stages.reduce((sum, stage) => (stage.axes & (1 << axis) ? sum + stage.cost : sum), 0);
+    stages.reduce((sum, stage) => (stage.axes.has(axis) ? sum + stage.cost : sum), 0);
   return [...author].sort((p, q) => dependentCost(q) - dependentCost(p) || p - q);
 }
 

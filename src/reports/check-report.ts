@@ -126,7 +126,7 @@ function baselineLines(study: Study, { plan, figures }: LaidOut): string[] {
 function stageLines({ plan }: LaidOut): string[] {
   return plan.stages.map((stage, index) => {
     const settings = plan.axes.reduce(
-      (product, { size }, axis) => (plan.axesOfStage[index] & (1 << axis) ? product * size : product),
+      (product, { size }, axis) => (plan.axesOfStage[index].has(axis) ? product * size : product),
       1,
     );
     return `${stage.name}: ${countText(settings)}`;
