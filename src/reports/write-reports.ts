@@ -33,6 +33,8 @@ export interface ReportRequest {
 }
 
 const closestMissesShown = 5;
+/** Pictures are set and compressed on threads of their own; more at once only take memory. */
+const chartsAtOnce = 4;
 
 /** Shortlist, charts, summary and data package of a run whose table is there. */
 export async function writeReports(request: ReportRequest): Promise<RunCounts> {
@@ -103,10 +105,14 @@ async function drawCharts(view: RunView, folder: string, carpet?: CarpetChoice):
   const { renderChart } = await import('../charts/index.ts');
   makeFolder(folder);
   const names = new Set<string>();
+  const drawing = new Set<Promise<unknown>>();
   for await (const { name, spec } of chartsOf(view, carpet)) {
-    await renderChart(name, spec, folder);
     names.add(name);
+    const drawn: Promise<unknown> = renderChart(name, spec, folder).finally(() => drawing.delete(drawn));
+    drawing.add(drawn);
+    if (drawing.size >= chartsAtOnce) await Promise.race(drawing);
   }
+  await Promise.all(drawing);
   for (const file of readdirSync(folder)) {
     const name = /^(.+?)\.(vl\.json|svg|png)$/.exec(file)?.[1];
     if (name !== undefined && !names.has(name)) rmSync(join(folder, file));

@@ -13,17 +13,8 @@ import { CsvBlockWriter } from '../../src/results/csv-block.ts';
 import { ParquetBlockWriter } from '../../src/results/parquet-block.ts';
 import { PartWriter } from '../../src/results/part-files.ts';
 import { column, randomNumbers } from '../results/sample-table.ts';
+import { type BenchRow, type Job, measure } from './measure.ts';
 
-export interface BenchRow {
-  readonly job: string;
-  readonly unit: string;
-  readonly median: number;
-  /** Least and greatest of the rounds. */
-  readonly spread: readonly [number, number];
-  readonly note: string;
-}
-
-const rounds = 7;
 const width = 30;
 const columns = Array.from({ length: width }, (_, c) => column(`figure_${c + 1}`));
 
@@ -53,32 +44,7 @@ function differentBlock(): Block {
   };
 }
 
-interface Job {
-  readonly job: string;
-  readonly unit: string;
-  readonly note: string;
-  /** Does the work once and returns how much of `unit` it did. */
-  readonly once: () => number | Promise<number>;
-}
-
 let consumed = 0;
-
-/** Runs all jobs in alternating rounds after a warm-up round. */
-async function measure(jobs: readonly Job[]): Promise<BenchRow[]> {
-  const rates = jobs.map((): number[] => []);
-  for (let round = -1; round < rounds; round++) {
-    for (const [j, job] of jobs.entries()) {
-      const start = performance.now();
-      const done = await job.once();
-      const seconds = (performance.now() - start) / 1000;
-      if (round >= 0) rates[j].push(done / seconds);
-    }
-  }
-  return jobs.map(({ job, unit, note }, j) => {
-    const sorted = rates[j].toSorted((a, b) => a - b);
-    return { job, unit, median: sorted[rounds >> 1], spread: [sorted[0], sorted[rounds - 1]], note };
-  });
-}
 
 function csvJob(job: string, blocks: readonly Block[], note: string): Job {
   const writer = new CsvBlockWriter(columns);

@@ -19,6 +19,7 @@ const record: RunRecord = {
   status: 'running',
   combinations: 306_000,
   blockSize: 16_384,
+  blocksPerPart: 1,
   rows: 300_000,
   columns: ['combination', 'wing_span_m'],
   methods: { downwash: 'torenbeek' },
