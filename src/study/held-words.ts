@@ -85,10 +85,11 @@ function placeDependants(choices: Choices): Dependants {
 function sizeDependants(path: string, choices: Choices): Dependants {
   const { wing, tail } = choices;
   const isSize = (wingSizes as readonly string[]).includes(path);
-  const free = wingSizes.filter((size) => !wing.given.includes(size));
-  // area, span and aspect ratio settle each other: with two of them given the taper moves only the chord
-  const chordOnly =
-    !isSize && wing.given.length === 2 && !wing.given.includes('wing.root_chord') && !path.endsWith('width');
+  const isWidth = path.endsWith('.width');
+  const spanStays = wing.form === 'panels' && wing.panelWidth === 'width' && !isWidth;
+  // area, span and aspect ratio settle each other: a taper then moves only the root chord
+  const chordOnly = !isSize && !isWidth && !wing.given.includes('wing.root_chord');
+  const free = wingSizes.filter((size) => !wing.given.includes(size) && !(spanStays && size === 'wing.span'));
   return {
     held: [...wing.given, ...tailGiven(choices)],
     also: cgWords(choices),

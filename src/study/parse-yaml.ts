@@ -7,6 +7,8 @@ import type { ListNode, MapEntry, MapNode, ScalarNode, SourceNode, Span } from '
 
 /** A study is some hundred lines; a megabyte is no study. */
 export const largestStudy = 1_000_000;
+/** One missing bracket upsets all that follows: later faults of syntax are mostly echoes. */
+const mostSyntaxFaults = 3;
 /** A study nests six deep; far less than what would exhaust the stack. */
 const deepestNesting = 30;
 
@@ -134,7 +136,7 @@ const yamlErrorWords: Record<string, readonly [found: string, remedy: string]> =
 };
 
 function addYamlErrors(document: Document.Parsed, text: string, faults: FaultList): void {
-  for (const { code, pos } of [...document.errors, ...document.warnings]) {
+  for (const { code, pos } of [...document.errors, ...document.warnings].slice(0, mostSyntaxFaults)) {
     const [start, end] = pos;
     const [found, remedy] = yamlErrorWords[code] ?? [
       'The text can’t be read as YAML here.',

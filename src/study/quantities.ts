@@ -176,9 +176,9 @@ export function rangeFault(quantity: Quantity, kind: QuantityKind, label: string
   if (si >= kind.least && si <= kind.most) return undefined;
   const show = (limit: number) => [shortNumber(limit / factor), unit].join(' ').trim();
   const asPercent = value / 100;
-  const share = kind.dimension === 'fraction_of_mac' || kind.dimension === 'ratio';
+  const isShare = kind.dimension === 'fraction_of_mac' || (kind.dimension === 'ratio' && kind.most <= 1);
   const hint =
-    share && unit === '' && Math.abs(value) > 1 && asPercent >= kind.least && asPercent <= kind.most;
+    isShare && unit === '' && Math.abs(value) > 1 && asPercent >= kind.least && asPercent <= kind.most;
   return {
     code: 'OUT_OF_RANGE',
     found: `${label} is ${show(si)}, outside ${show(kind.least)} to ${show(kind.most)} (${kind.limits}).`,

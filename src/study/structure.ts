@@ -42,7 +42,7 @@ function tellValue(
   const branch = issue.code === 'invalid_union' ? deepestBranch(issue.errors) : undefined;
   const words = node.kind === 'scalar' && typeof node.value === 'string' ? wordsOf(issue) : [];
   if (branch) for (const inner of branch) tell(inner, path, root, faults);
-  else if (words.length > 0) tellUnknownWord(words, path, node as ScalarNode, faults);
+  else if (words.length > 0) tellUnknownWord(words, wantedBy(issue), path, node as ScalarNode, faults);
   else tellWrongType(wantedBy(issue), path, node, faults);
 }
 
@@ -123,6 +123,7 @@ function tellUnknownKeys(
 
 function tellUnknownWord(
   words: readonly string[],
+  wanted: string,
   path: SourcePath,
   node: ScalarNode,
   faults: FaultList,
@@ -131,8 +132,8 @@ function tellUnknownWord(
   faults.add(
     'UNKNOWN_WORD',
     node.span,
-    `${pathText(path)} is '${shorten(node.text)}'; it may be ${words.join(', ')}.`,
-    near ? `Did you mean '${near}'?` : `Write one of ${words.join(', ')}.`,
+    `${pathText(path)} is '${shorten(node.text)}', where ${wanted} is wanted.`,
+    near ? `Did you mean '${near}'?` : `Write ${wanted}.`,
   );
 }
 

@@ -88,3 +88,22 @@ test('a CG in % MAC rides with the wing, one at a station stays; the words say s
   );
   expect(read(text).held[0]!.held).toContain('cg.aft as a station (it stays where it is)');
 });
+
+test('with panels of stated width the span stays unless a width varies', () => {
+  const panelled = (axis: string) =>
+    read(
+      edited(
+        [
+          '    span: 9.4 m\n    taper: 0.62\n    sweep_quarter_chord: 1 deg\n    dihedral: 5 deg\n',
+          '    panels: [{width: 3 m, taper: 0.8}, {width: 1.7 m, taper: 0.6}]\n',
+        ],
+        ['  wing.taper: [0.4, 0.5, 0.6]', `  ${axis}`],
+      ),
+    ).held[0]!.follows;
+  const taper = panelled('wing.panels[1].taper: [0.7, 0.8]');
+  expect(taper).toContain('wing.root_chord');
+  expect(taper).not.toContain('wing.span');
+  expect(panelled('wing.panels[1].width: [3 m, 3.2 m]')).toEqual(
+    expect.arrayContaining(['wing.span', 'wing.aspect_ratio', 'wing.root_chord']),
+  );
+});
