@@ -60,10 +60,32 @@ function gridScale({ title, values }: GridAxis): Scale {
 /** Where every requirement is kept; empty when there are none to keep. */
 function feasibleArea(data: SliceChartData): Point[][] {
   if (data.requirements.length === 0) return [];
+  const inCells = data.requirements.map(({ slack }) => ({
+    slack,
+    step: steepestStep(slack, data.x.values.length),
+  }));
   const least = Array.from({ length: data.aftMargin.length }, (_, index) =>
-    data.requirements.reduce((worst, { slack }) => Math.min(worst, slack[index]!), Number.POSITIVE_INFINITY),
+    inCells.reduce(
+      (worst, { slack, step }) => Math.min(worst, slack[index]! / step),
+      Number.POSITIVE_INFINITY,
+    ),
   );
   return areaAtLeast(gridField(data, least), 0);
+}
+
+/**
+ * Largest change of a slack from one grid point to the next; 1 for a level one. Slacks divided by it
+ * count in cells, so that the least of several runs straight up to each one's own edge.
+ */
+function steepestStep(slack: ArrayLike<number>, columns: number): number {
+  let steepest = 0;
+  for (let index = 0; index < slack.length; index++) {
+    const across = index % columns === 0 ? 0 : Math.abs(slack[index]! - slack[index - 1]!);
+    const upward = index < columns ? 0 : Math.abs(slack[index]! - slack[index - columns]!);
+    if (across > steepest) steepest = across;
+    if (upward > steepest) steepest = upward;
+  }
+  return steepest === 0 ? 1 : steepest;
 }
 
 const baselinePoint = { shape: 'square', size: 110, fill: colours.ink } as const;
