@@ -106,13 +106,17 @@ async function drawCharts(view: RunView, folder: string, carpet?: CarpetChoice):
   makeFolder(folder);
   const names = new Set<string>();
   const drawing = new Set<Promise<unknown>>();
+  const failures: unknown[] = [];
   for await (const { name, spec } of chartsOf(view, carpet)) {
     names.add(name);
-    const drawn: Promise<unknown> = renderChart(name, spec, folder).finally(() => drawing.delete(drawn));
+    const drawn: Promise<unknown> = renderChart(name, spec, folder)
+      .catch((error: unknown) => failures.push(error))
+      .finally(() => drawing.delete(drawn));
     drawing.add(drawn);
     if (drawing.size >= chartsAtOnce) await Promise.race(drawing);
   }
   await Promise.all(drawing);
+  if (failures.length > 0) throw failures[0];
   for (const file of readdirSync(folder)) {
     const name = /^(.+?)\.(vl\.json|svg|png)$/.exec(file)?.[1];
     if (name !== undefined && !names.has(name)) rmSync(join(folder, file));
