@@ -2,29 +2,32 @@ import { readFileSync } from 'node:fs';
 import { UsageError } from './errors.ts';
 import { figuresOfStudy } from './figures/study-figures.ts';
 import { buildStages } from './stages/build-stages.ts';
+import { decodeStudy } from './study/parse-yaml.ts';
 import type { KnownFigure } from './study/read-study.ts';
 import { readStudy } from './study/read-study.ts';
 import type { Study } from './study/study.ts';
 
 /** Reads and checks a study file. Throws StudyError with every fault, or UsageError when there is no such file. */
 export function readStudyFile(path: string): Study {
-  return readStudyText(readText(path), path);
+  return readStudyText(decodeStudy(readBytes(path), path), path);
 }
 
 export function readStudyText(text: string, file: string): Study {
   return readStudy(text, file, knownFigures);
 }
 
-/** The figures that a study can require, prefer or put in its table: those that it gives or that are worked out. */
+/** The figures that a study can require, prefer or put in its table: numbers that it gives or that are worked out. */
 function knownFigures(study: Study): KnownFigure[] {
   const figures = figuresOfStudy(study, { requirements: [], ranges: [], reasons: [] });
   const workedOut = new Set(buildStages(study).flatMap((stage) => stage.writes));
-  return [...figures.values()].filter(({ name, formula }) => formula === 'given' || workedOut.has(name));
+  return [...figures.values()].filter(
+    ({ name, formula, kind }) => kind === 'number' && (formula === 'given' || workedOut.has(name)),
+  );
 }
 
-function readText(path: string): string {
+function readBytes(path: string): Uint8Array {
   try {
-    return readFileSync(path, 'utf8');
+    return readFileSync(path);
   } catch (error) {
     const code = error instanceof Error && 'code' in error ? error.code : undefined;
     const why =

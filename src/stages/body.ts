@@ -74,12 +74,16 @@ class BodyReader {
     return this.boom;
   }
 
-  read(inputs: readonly Float64Array[], row: number): void {
+  /** @returns false when varied stations no longer run aft: such a body cannot be worked out */
+  read(inputs: readonly Float64Array[], row: number): boolean {
+    let ascending = true;
     for (let i = 0; i < this.count; i++) {
       this.at[i] = inputs[readsPerStation * i][row];
       this.widths[i] = inputs[readsPerStation * i + 1][row];
+      if (i > 0 && !(this.at[i] > this.at[i - 1])) ascending = false;
     }
     if (this.boom) this.boomWidth = inputs[readsPerStation * this.count][row];
+    return ascending;
   }
 }
 
@@ -92,7 +96,10 @@ function widthStage(body: BodyReader, places: BaselinePlaces): Stage {
     cost: 30,
     kernel: (count, inputs, [width]) => {
       for (let row = 0; row < count; row++) {
-        body.read(inputs, row);
+        if (!body.read(inputs, row)) {
+          width[row] = Number.NaN;
+          continue;
+        }
         width[row] = bodyWidthAt(body.count, body.at, body.widths, quarterChord);
       }
     },
@@ -112,7 +119,10 @@ function forwardStage(body: BodyReader, places: BaselinePlaces): Stage {
       const area = inputs[own + 2];
       const slope = inputs[own + 3];
       for (let row = 0; row < count; row++) {
-        body.read(inputs, row);
+        if (!body.read(inputs, row)) {
+          forward[row] = Number.NaN;
+          continue;
+        }
         forward[row] = multhoppForward(
           body.count,
           body.at,
@@ -139,7 +149,10 @@ function aftStage(body: BodyReader, places: BaselinePlaces): Stage {
     kernel: (count, inputs, [aft]) => {
       const wake = inputs[own];
       for (let row = 0; row < count; row++) {
-        body.read(inputs, row);
+        if (!body.read(inputs, row)) {
+          aft[row] = Number.NaN;
+          continue;
+        }
         aft[row] = multhoppAft(
           body.count,
           body.at,
@@ -180,7 +193,11 @@ function quickStage(body: BodyReader, places: BaselinePlaces): Stage {
       const area = inputs[own + 2];
       const mac = inputs[own + 3];
       for (let row = 0; row < count; row++) {
-        body.read(inputs, row);
+        if (!body.read(inputs, row)) {
+          slope[row] = Number.NaN;
+          place[row] = Number.NaN;
+          continue;
+        }
         const ahead = places.rootLeadingEdge - body.at[0];
         const last = body.at[body.count - 1] - places.rootLeadingEdge;
         const end = bodyStationPlace(

@@ -38,7 +38,7 @@ export function loadingRangeStages({ cg }: Pick<Study, 'cg'>): Stage[] {
   return [cgStage('forward', cg.forward), cgStage('aft', cg.aft)];
 }
 
-/** Margins at both ends of the loading range. */
+/** Margins at both ends of the loading range; empty where the ends are reversed. */
 export const marginsStage: Stage = {
   name: 'static margins',
   reads: ['neutral_point', 'cg_forward', 'cg_aft'],
@@ -46,6 +46,11 @@ export const marginsStage: Stage = {
   cost: 2,
   kernel: (count, [point, forward, aft], [marginForward, marginAft]) => {
     for (let row = 0; row < count; row++) {
+      if (forward[row] > aft[row]) {
+        marginForward[row] = Number.NaN;
+        marginAft[row] = Number.NaN;
+        continue;
+      }
       marginForward[row] = staticMargin(point[row], forward[row]);
       marginAft[row] = staticMargin(point[row], aft[row]);
     }

@@ -39,9 +39,8 @@ function checksOf(study: Study): RangeCheck[] {
   const { methods, tail } = study;
   const wing = ['wing_aspect_ratio', 'wing_formula_taper', 'wing_formula_sweep'];
   const tailReads = ['tail_aspect_ratio', 'tail_taper', `tail_sweep_${tail.sweep}`];
-  const sweepFrom = tail.sweep === 'quarter_chord' ? 0.25 : 0;
   const tailSweep = (A: number, taper: number, sweep: number) =>
-    Math.atan(sweepTangentAt(Math.tan(sweep), sweepFrom, 0.25, A, taper));
+    tail.sweep === 'quarter_chord' ? sweep : Math.atan(sweepTangentAt(Math.tan(sweep), 0, 0.25, A, taper));
   const checks: RangeCheck[] = [
     {
       label: 'body carry-over',
@@ -143,19 +142,23 @@ function checkStage({ label, reads, inside }: RangeCheck, writes: string): Stage
 /** Why a combination could not be worked out. */
 export const reasonLabels = [
   'the tail’s quarter-MAC is not behind the wing root’s trailing edge',
+  'the body stations do not run aft',
+  'the forward CG lies aft of the aft CG',
   'the neutral point is not finite',
 ] as const;
 
-/** Writes the reason's index, or an empty cell where the neutral point was worked out. */
+/** Writes the reason's index, or an empty cell where neutral point and margins were worked out. */
 export const reasonStage: Stage = {
   name: 'reasons',
-  reads: ['wake_length', 'neutral_point'],
+  reads: ['wake_length', 'body_moment_aft', 'neutral_point', 'cg_forward', 'cg_aft'],
   writes: ['not_computed_because'],
   cost: 2,
-  kernel: (count, [wake, point], [reason]) => {
+  kernel: (count, [wake, body, point, forward, aft], [reason]) => {
     for (let row = 0; row < count; row++) {
-      if (Number.isFinite(point[row])) reason[row] = Number.NaN;
-      else reason[row] = Number.isNaN(wake[row]) ? 0 : 1;
+      if (Number.isNaN(wake[row])) reason[row] = 0;
+      else if (Number.isNaN(body[row])) reason[row] = 1;
+      else if (forward[row] > aft[row]) reason[row] = 2;
+      else reason[row] = Number.isFinite(point[row]) ? Number.NaN : 3;
     }
   },
 };

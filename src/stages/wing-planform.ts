@@ -159,6 +159,7 @@ function planformKernel({ panels, rule, inputOf, widthKind, singleTaper }: Planf
   const out = new Float64Array(panelFigureCount);
   const readPanel = (inputs: readonly Float64Array[], panel: number, which: number, row: number) =>
     inputs[inputOf[sizeCount + readsPerPanel * panel + which]][row];
+  const sweepAsGiven = singleTaper && panels[0].sweepAtQuarterChord;
   const readSize = (inputs: readonly Float64Array[], which: number, row: number, span: number) =>
     inputOf[which] < 0 ? span : inputs[inputOf[which]][row];
 
@@ -205,7 +206,8 @@ function planformKernel({ panels, rule, inputOf, widthKind, singleTaper }: Planf
       outputs[9][row] = out[panelFigure.heightOfMac];
       outputs[10][row] = equivalentRectangularSpan(S, mac);
       outputs[11][row] = formulaTaper;
-      outputs[12][row] = Math.atan(sweepTangent);
+      // A sweep that is given is passed on as it is, so that an edge of a formula's range stays an edge.
+      outputs[12][row] = sweepAsGiven ? readPanel(inputs, 0, 2, row) : Math.atan(sweepTangent);
       outputs[13][row] = Math.atan(sweepTangentAt(sweepTangent, 0.25, 0.5, A, formulaTaper));
     }
   };
