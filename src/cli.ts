@@ -1,38 +1,12 @@
 #!/usr/bin/env node
-import type { Argv } from 'yargs';
 /** Arguments and exit codes, nothing else. Every command is loaded only when it is called. */
-import yargs from 'yargs';
-import { hideBin } from 'yargs/helpers';
+import type { Argv } from 'yargs';
+import { flag, numberOption, repeatedTextOption, textOption } from './commands/arguments.ts';
+import { complete } from './commands/complete.ts';
 import { tellFailure, usageFailure } from './commands/failure.ts';
+import { hideBin, yargs } from './commands/yargs.ts';
 import { exitCodes } from './errors.ts';
 import { program } from './version.ts';
-
-/** yargs turns a repeated flag into a list and a bad number into NaN; both are mistakes here. */
-function singleNumber(name: string) {
-  return (value: unknown): number | undefined => {
-    if (value === undefined) return undefined;
-    if (Array.isArray(value) || typeof value !== 'number' || !Number.isFinite(value)) {
-      throw usageFailure(`--${name} takes one number.`);
-    }
-    return value;
-  };
-}
-
-function singleText(name: string) {
-  return (value: unknown): string | undefined => {
-    if (value === undefined) return undefined;
-    if (typeof value !== 'string' || value === '') throw usageFailure(`--${name} takes one text.`);
-    return value;
-  };
-}
-
-function numberOption(describe: string, name: string) {
-  return { type: 'number', describe, coerce: singleNumber(name), requiresArg: true } as const;
-}
-
-function textOption(describe: string, name: string) {
-  return { type: 'string', describe, coerce: singleText(name), requiresArg: true } as const;
-}
 
 const studyArgument = { type: 'string', demandOption: true, describe: 'study file (YAML)' } as const;
 const runArgument = {
@@ -48,24 +22,20 @@ function runCommand(parser: Argv) {
     (command) =>
       command
         .positional('study', studyArgument)
-        .option('out', textOption('folder that holds the runs', 'out'))
-        .option('name', textOption('name of the run folder (default: the study file’s)', 'name'))
-        .option('workers', numberOption('worker threads (default: one per core)', 'workers'))
+        .option('out', textOption('out', 'folder that holds the runs'))
+        .option('name', textOption('name', 'name of the run folder (default: the study file’s)'))
+        .option('workers', numberOption('workers', 'worker threads (default: one per core)'))
         .option(
           'part-size',
-          numberOption('combinations a part, rounded up to whole blocks of 16384', 'part-size'),
+          numberOption('part-size', 'combinations a part, rounded up to whole blocks of 16384'),
         )
-        .option('afresh', { type: 'boolean', default: false, describe: 'discard what the run folder holds' })
+        .option('afresh', flag('afresh', 'discard what the run folder holds'))
         .option('charts', {
-          type: 'boolean',
+          ...flag('charts', 'draw the charts (--no-charts leaves them out)'),
           default: true,
-          describe: 'draw the charts (--no-charts leaves them out)',
         })
-        .option('quiet', { type: 'boolean', alias: 'q', describe: 'say nothing but errors' })
-        .option('json-lines', {
-          type: 'boolean',
-          describe: 'progress as one JSON object a line',
-        })
+        .option('quiet', { ...flag('quiet', 'say nothing but errors'), alias: 'q' })
+        .option('json-lines', flag('json-lines', 'progress as one JSON object a line'))
         .conflicts('quiet', 'json-lines'),
     async (args) => (await import('./commands/run.ts')).run(args),
   );
@@ -79,7 +49,7 @@ function readingCommands(parser: Argv) {
       (command) =>
         command
           .positional('study', studyArgument)
-          .option('out', textOption('folder whose disk the estimate looks at', 'out')),
+          .option('out', textOption('out', 'folder whose disk the estimate looks at')),
       async (args) => (await import('./commands/check.ts')).check(args),
     )
     .command(
@@ -90,15 +60,10 @@ function readingCommands(parser: Argv) {
           .positional('study', { ...studyArgument, describe: 'study file or run folder' })
           .option(
             'combination',
-            numberOption('number of the combination (default: the baseline)', 'combination'),
+            numberOption('combination', 'number of the combination (default: the baseline)'),
           )
-          .option('set', {
-            type: 'string',
-            array: true,
-            requiresArg: true,
-            describe: 'give the baseline another number: --set "wing.span=9.4 m"',
-          })
-          .option('markdown', { type: 'boolean', default: false, describe: 'as a Markdown table' }),
+          .option('set', repeatedTextOption('give the baseline another number: --set "wing.span=9.4 m"'))
+          .option('markdown', flag('markdown', 'as a Markdown table')),
       async (args) => (await import('./commands/worksheet.ts')).worksheet(args),
     )
     .command(
@@ -109,11 +74,11 @@ function readingCommands(parser: Argv) {
           .positional('run', runArgument)
           .option(
             'band',
-            textOption('another static-margin band, such as 8%:18% (either edge may be left out)', 'band'),
+            textOption('band', 'another static-margin band, such as 8%:18% (either edge may be left out)'),
           )
           .option(
             'carpet',
-            textOption('figure of the carpet plot, and two axes: "tail_area tail.arm tail.volume"', 'carpet'),
+            textOption('carpet', 'figure of the carpet plot, and two axes: "tail_area tail.arm tail.volume"'),
           ),
       async (args) => (await import('./commands/charts.ts')).charts(args),
     );
@@ -127,7 +92,7 @@ function referenceCommands(parser: Argv) {
       (command) =>
         command
           .positional('study', { type: 'string', describe: 'study file, to list the figures of that study' })
-          .option('json', { type: 'boolean', default: false, describe: 'as JSON' }),
+          .option('json', flag('json', 'as JSON')),
       async (args) => (await import('./commands/figures.ts')).figures(args),
     )
     .command(
@@ -142,15 +107,28 @@ function referenceCommands(parser: Argv) {
       (command) =>
         command
           .positional('kind', { choices: ['tourer', 'sailplane', 'uncrewed'] as const, demandOption: true })
-          .option('to', textOption('file to write; it must not be there yet', 'to')),
+          .option('to', textOption('to', 'file to write; it must not be there yet')),
       async (args) => (await import('./commands/new.ts')).newStudy(args),
     );
 }
 
-async function main(): Promise<void> {
+/** The parser's own sentences where they leave out what is meant. */
+const wording: Record<string, unknown> = {
+  string: 'value',
+  boolean: 'flag',
+  'Did you mean %s?': 'There is no such command; did you mean %s?',
+  'Not enough non-option arguments: got %s, need at least %s': {
+    one: 'Too few arguments: %s given, %s needed.',
+    other: 'Too few arguments: %s given, %s needed.',
+  },
+  'Not enough arguments following: %s': '--%s is given without its value.',
+};
+
+function makeParser(): Argv {
   const parser = yargs(hideBin(process.argv))
     .scriptName('aftlimit')
     .locale('en')
+    .updateStrings(wording as Record<string, string>)
     .usage(
       '$0 <command>\n\nTrade studies of wing and tail: is the static margin kept over the whole loading range?',
     )
@@ -160,25 +138,53 @@ async function main(): Promise<void> {
     .strict()
     .recommendCommands()
     .demandCommand(1, 'A command is wanted; see --help.')
-    .parserConfiguration({ 'duplicate-arguments-array': true, 'parse-positional-numbers': false })
+    .parserConfiguration({
+      // Said outright, though it is so anyway: else completion does not offer --no-charts.
+      'boolean-negation': true,
+      'duplicate-arguments-array': true,
+      'parse-positional-numbers': false,
+      'dot-notation': false,
+    })
     .wrap(Math.min(110, process.stdout.columns ?? 100))
     .epilogue(
-      'Results go to standard output, everything else to standard error. Exit 0: done; 1: the machine; 2: the study or the arguments.',
+      'Results go to standard output, everything else to standard error. Exit 0: done; 1: the machine; 2: the study or the arguments; 130: stopped by Ctrl-C.',
     )
-    .completion('completion', 'print a completion script for bash or zsh')
     .exitProcess(false)
     .fail((message, error) => {
-      throw error ?? usageFailure(message);
+      // The parser throws its own kind of error for a mistake in the arguments, too.
+      throw error === undefined || error.name === 'YError' ? usageFailure(message) : error;
     });
-  referenceCommands(readingCommands(runCommand(parser)));
-  await parser.parseAsync();
+  return referenceCommands(readingCommands(runCommand(parser))).completion(
+    'completion',
+    'print a completion script for bash, zsh or fish',
+    offerWords,
+  );
 }
 
-process.stdout.on('error', (error: NodeJS.ErrnoException) => {
-  if (error.code === 'EPIPE') process.exit(exitCodes.done);
-  throw error;
-});
+/** Answers the completion script, which calls with what is typed so far. At once: the parser does not wait. */
+function offerWords(
+  _current: string,
+  _args: unknown,
+  offeredByParser: (done: (error: Error | null, words?: string[]) => void) => void,
+  done: (words: string[]) => void,
+): void {
+  const [, ...words] = hideBin(process.argv);
+  offeredByParser((_error, offered = []) => done(complete(words, offered)));
+}
 
-main().catch(async (error: unknown) => {
-  process.exitCode = await tellFailure(error);
+/** A reader that has seen enough (`| head`) ends the program; any other refusal is the machine's fault. */
+process.stdout.on('error', async (error: NodeJS.ErrnoException) => {
+  if (error.code === 'EPIPE') process.exit(exitCodes.done);
+  const { writeFault } = await import('./results/machine-fault.ts');
+  process.exit(await tellFailure(writeFault(error, 'to standard output')));
 });
+/** A run goes on when nobody listens any more. */
+process.stderr.on('error', () => {});
+
+try {
+  await makeParser().parseAsync();
+} catch (error) {
+  // What is typed so far may well be wrong while a shell asks how it could go on.
+  const isUnfinished = process.argv.includes('--get-yargs-completions');
+  process.exitCode = isUnfinished ? exitCodes.done : await tellFailure(error);
+}

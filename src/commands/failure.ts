@@ -19,13 +19,35 @@ export async function tellFailure(error: unknown): Promise<number> {
   if (error instanceof StudyError) {
     const { formatStudyError } = await import('../study/format-study-error.ts');
     process.stderr.write(`${formatStudyError(error, { color: colourAllowed() })}\n`);
-    return exitCodes.user;
-  }
-  if (error instanceof UsageError || error instanceof MachineError) {
+  } else if (error instanceof UsageError || error instanceof MachineError) {
     process.stderr.write(`${error.code}  ${error.message}\n  ${error.remedy}\n`);
-    return error instanceof UsageError ? exitCodes.user : exitCodes.machine;
+  } else {
+    process.stderr.write(`This is a bug in aftlimit; finished parts are safe.\n${stackOf(error)}\n`);
   }
-  const stack = error instanceof Error ? (error.stack ?? error.message) : String(error);
-  process.stderr.write(`This is a bug in aftlimit; finished parts are safe.\n${stack}\n`);
-  return exitCodes.bug;
+  return exitCodeOf(error);
+}
+
+/** The same as one JSON object on a line, for `--json-lines`. @returns the exit code */
+export function tellFailureAsLine(error: unknown): number {
+  const exitCode = exitCodeOf(error);
+  const said = { event: 'failed', time: new Date().toISOString(), exitCode, ...failureFields(error) };
+  process.stderr.write(`${JSON.stringify(said)}\n`);
+  return exitCode;
+}
+
+function failureFields(error: unknown): object {
+  if (error instanceof StudyError) return { message: error.message, file: error.file, faults: error.faults };
+  if (error instanceof UsageError || error instanceof MachineError) {
+    return { code: error.code, message: error.message, remedy: error.remedy };
+  }
+  return { message: 'This is a bug in aftlimit; finished parts are safe.', stack: stackOf(error) };
+}
+
+function exitCodeOf(error: unknown): number {
+  if (error instanceof StudyError || error instanceof UsageError) return exitCodes.user;
+  return error instanceof MachineError ? exitCodes.machine : exitCodes.bug;
+}
+
+function stackOf(error: unknown): string {
+  return error instanceof Error ? (error.stack ?? error.message) : String(error);
 }

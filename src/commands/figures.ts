@@ -8,7 +8,7 @@ import { readStudyOf } from './worksheet.ts';
 
 export interface FiguresArguments {
   readonly study: string | undefined;
-  readonly json: boolean;
+  readonly json: boolean | undefined;
 }
 
 /** Lists every figure, or those of one study. */

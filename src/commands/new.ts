@@ -1,4 +1,5 @@
 import { existsSync } from 'node:fs';
+import { dirname } from 'node:path';
 import { UsageError } from '../errors.ts';
 import { writeFileAtomically } from '../results/atomic-file.ts';
 import type { StarterKind } from '../study/starters.ts';
@@ -22,6 +23,9 @@ export async function newStudy({ kind, to }: NewArguments): Promise<void> {
       `${to} is already there.`,
       'Give another name; nothing is overwritten.',
     );
+  if (!existsSync(dirname(to))) {
+    throw new UsageError('NO_SUCH_FILE', `There is no folder ${dirname(to)}.`, 'Make it, or name another.');
+  }
   writeFileAtomically(to, text);
   process.stderr.write(`${to} is written. aftlimit check ${to} tells what it would do.\n`);
 }

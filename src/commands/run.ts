@@ -1,7 +1,7 @@
 import { availableParallelism } from 'node:os';
 import { exitCodes } from '../errors.ts';
 import { runStudy } from '../run-study.ts';
-import { usageFailure } from './failure.ts';
+import { tellFailureAsLine, usageFailure } from './failure.ts';
 import { makeReporter, progressMode } from './progress.ts';
 
 export interface RunArguments {
@@ -10,8 +10,8 @@ export interface RunArguments {
   readonly name: string | undefined;
   readonly workers: number | undefined;
   readonly partSize: number | undefined;
-  readonly afresh: boolean;
-  readonly charts: boolean;
+  readonly afresh: boolean | undefined;
+  readonly charts: boolean | undefined;
   readonly quiet: boolean | undefined;
   readonly jsonLines: boolean | undefined;
 }
@@ -27,7 +27,8 @@ export async function run(args: RunArguments): Promise<void> {
     throw usageFailure('--name is one folder name, without slashes and not hidden.');
   }
   const stop = new AbortController();
-  const reporter = makeReporter(progressMode(args));
+  const mode = progressMode(args);
+  const reporter = makeReporter(mode);
   const onSignal = (signal: NodeJS.Signals) => {
     if (stop.signal.aborted) process.exit(exitCodes.interrupted);
     reporter.note(`${signal}: finishing the parts in hand, then stopping. Once more stops at once.`);
@@ -44,13 +45,16 @@ export async function run(args: RunArguments): Promise<void> {
         ...(partSize === undefined
           ? {}
           : { partSize: wholeNumber('part-size', partSize, Number.MAX_SAFE_INTEGER) ?? partSize }),
-        afresh: args.afresh,
-        charts: args.charts,
+        afresh: args.afresh ?? false,
+        charts: args.charts ?? true,
         stop: stop.signal,
       },
       reporter,
     );
     if (outcome === 'stopped') process.exitCode = exitCodes.interrupted;
+  } catch (error) {
+    if (mode !== 'json') throw error;
+    process.exitCode = tellFailureAsLine(error);
   } finally {
     process.off('SIGINT', onSignal).off('SIGTERM', onSignal);
   }

@@ -24,7 +24,7 @@ export interface WorksheetArguments {
   readonly study: string;
   readonly combination: number | undefined;
   readonly set: readonly string[] | undefined;
-  readonly markdown: boolean;
+  readonly markdown: boolean | undefined;
 }
 
 /** Prints the worksheet of one combination, or of the baseline. */
@@ -78,10 +78,11 @@ function combinationWorksheet(
 
 function replacements(study: Study, set: readonly string[]): Map<string, number> {
   const figureName = figureOfInput(study);
-  return new Map(
-    set.map((text) => {
-      const { path, value } = readReplacement(study, text);
-      return [figureName(path), value];
-    }),
-  );
+  const replaced = new Map<string, number>();
+  for (const text of set) {
+    const { path, value } = readReplacement(study, text);
+    if (replaced.has(figureName(path))) throw usageFailure(`--set gives ${path} twice.`);
+    replaced.set(figureName(path), value);
+  }
+  return replaced;
 }
