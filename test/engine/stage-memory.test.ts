@@ -1,0 +1,185 @@
+import { describe, expect, it } from 'vitest';
+import { Evaluator } from '../../src/engine/evaluator.ts';
+import { layOut } from '../../src/engine/lay-out.ts';
+import { tileShape } from '../../src/engine/tile.ts';
+import type { Plan } from '../../src/plan/plan.ts';
+import { blockCount, blockSize, digitsOf } from '../../src/plan/plan.ts';
+import { readStudyFile } from '../../src/read-study-file.ts';
+import type { SkipTest, Study } from '../../src/study/study.ts';
+import { testStudy } from '../studies.ts';
+import { compareWithPlainLoop } from './compare-with-plain-loop.ts';
+
+interface Counted {
+  readonly plan: Plan;
+  /** Kernel calls and rows of each stage. */
+  readonly calls: number[];
+  readonly rows: number[];
+}
+
+/** The plan of a study with counters around its kernels. */
+function counted(study: Study): Counted & { evaluate: () => number } {
+  const { plan, columns } = layOut(study);
+  const calls = plan.stages.map(() => 0);
+  const rows = plan.stages.map(() => 0);
+  const stages = plan.stages.map((stage, index) => ({
+    ...stage,
+    kernel: (count: number, inputs: readonly Float64Array[], outputs: readonly Float64Array[]) => {
+      calls[index]++;
+      rows[index] += count;
+      stage.kernel(count, inputs, outputs);
+    },
+  }));
+  const evaluator = new Evaluator(
+    { ...plan, stages },
+    columns.map(({ figure }) => figure.name),
+  );
+  const evaluate = () => {
+    let kept = 0;
+    for (let block = 0; block < blockCount(plan); block++)
+      kept += evaluator.evaluate(block * blockSize, blockSize);
+    return kept;
+  };
+  return { plan, calls, rows, evaluate };
+}
+
+function settings(plan: Plan, stage: number): number {
+  return plan.axes.reduce(
+    (product, { size }, axis) => (plan.axesOfStage[stage].has(axis) ? product * size : product),
+    1,
+  );
+}
+
+/** Whether a test of a skip rule holds; tests of the tourer are open to one side. */
+function holds({ path, below, above }: SkipTest, plan: Plan, digits: readonly number[]): boolean {
+  const axis = plan.axes.findIndex(({ name }) => name === path);
+  const value = plan.axes[axis].values[0][digits[axis]];
+  return (below === undefined || value < below) && (above === undefined || value > above);
+}
+
+const isPerRow = (plan: Plan, stage: number) => plan.axesOfStage[stage].size === plan.axes.length;
+
+/** Settings of a stage's own axes that occur in a tile of which at least one row is kept. */
+function neededSettings(plan: Plan, stage: number, keeps: (digits: readonly number[]) => boolean): number {
+  const { suffixStart, suffixTotal } = tileShape(plan);
+  const seen = new Set<number>();
+  for (let first = 0; first < plan.combinations; first += suffixTotal) {
+    const kept = Array.from({ length: suffixTotal }, (_, row) => digitsOf(plan, first + row)).some(keeps);
+    if (!kept) continue;
+    const digits = digitsOf(plan, first);
+    seen.add(
+      digits.reduce(
+        (key, digit, axis) =>
+          axis < suffixStart && plan.axesOfStage[stage].has(axis) ? key * plan.axes[axis].size + digit : key,
+        0,
+      ),
+    );
+  }
+  const inTile = plan.axes.reduce(
+    (product, { size }, axis) =>
+      axis >= suffixStart && plan.axesOfStage[stage].has(axis) ? product * size : product,
+    1,
+  );
+  return seen.size * inTile;
+}
+
+describe('each stage only as often as it must', () => {
+  it('on the tourer without skips: once for each setting of its own axes', () => {
+    const { plan, rows, evaluate } = counted({ ...readStudyFile('studies/coastal-tourer.yaml'), skip: [] });
+    expect(evaluate()).toBe(plan.combinations);
+    plan.stages.forEach((stage, k) => {
+      expect(rows[k], stage.name).toBe(settings(plan, k));
+    });
+    const of = (name: string) =>
+      settings(
+        plan,
+        plan.stages.findIndex((stage) => stage.name === name),
+      );
+    expect(of('condition')).toBe(1);
+    expect(of('tail lift slope')).toBe(1);
+    expect(of('body ahead of the wing')).toBeLessThan(plan.combinations / 1000);
+    expect(of('requirements')).toBe(plan.combinations);
+  });
+
+  it('on the tourer with its skips: not at all for what is wholly left out', () => {
+    const study = readStudyFile('studies/coastal-tourer.yaml');
+    const { plan, rows, evaluate } = counted(study);
+    const kept = evaluate();
+    const keeps = (digits: readonly number[]) =>
+      !study.skip.some(({ tests }) => tests.every((test) => holds(test, plan, digits)));
+    expect(kept).toBeLessThan(plan.combinations);
+    plan.stages.forEach((stage, k) => {
+      if (stage.name === 'skip') return;
+      expect(rows[k], stage.name).toBe(isPerRow(plan, k) ? kept : neededSettings(plan, k, keeps));
+    });
+    const planform = plan.stages.findIndex((stage) => stage.name === 'wing planform');
+    expect(rows[planform]).toBeLessThan(settings(plan, planform));
+  });
+
+  it('nothing is evaluated when everything is skipped', () => {
+    const rule = '- {when: {wing.span: {above: 1 m}}, because: all of it}';
+    const { plan, calls, evaluate } = counted(
+      testStudy({ vary: 'wing.span: [9 m, 10 m]\ntail.volume: [0.4, 0.5]', skip: rule }),
+    );
+    expect(evaluate()).toBe(0);
+    plan.stages.forEach(({ name }, k) => {
+      expect(calls[k] > 0, name).toBe(name === 'skip');
+    });
+  });
+});
+
+describe('bounded memory', () => {
+  const vary = `wing.span: {from: 8.4 m, to: 11 m, count: 40, hold: area}
+wing.taper: {from: 0.4, to: 1, count: 9}
+tail.arm: {from: 3.6 m, to: 5.2 m, count: 20}
+tail.volume: {from: 0.32, to: 0.56, count: 30}
+cg: [{forward: 20 %, aft: 29 %}, {forward: 28 %, aft: 38 %}]`;
+  const study = testStudy({ vary });
+
+  it('does not hold all of a stage with very many settings', () => {
+    const { plan, rows, evaluate } = counted(study);
+    const stage = plan.stages.findIndex(({ name }) => name === 'neutral point');
+    const bytes = 8 * 5 * settings(plan, stage);
+    expect(bytes).toBeGreaterThan(2 * 4 * 1024 * 1024);
+    evaluate();
+    const once = rows[stage];
+    evaluate();
+    expect(rows[stage]).toBeGreaterThan(once);
+    const planform = plan.stages.findIndex(({ name }) => name === 'wing planform');
+    expect(rows[planform]).toBe(settings(plan, planform));
+  });
+
+  it('gives right answers after what was remembered had to go', () => {
+    const blocks = [20, 3, 20, 0, 25, 3, 0, 12];
+    const found = compareWithPlainLoop(study, blocks);
+    expect(found.rows).toBe(blocks.length * blockSize);
+    expect(found.worst, found.where).toBeLessThan(1e-12);
+  });
+
+  it('forgets a setting at which a stage threw', () => {
+    const { plan } = layOut(
+      testStudy({ vary: 'wing.taper: [0.4, 0.6]\ntail.volume: {from: 0.3, to: 0.6, count: 1500}' }),
+    );
+    let throws = false;
+    const stages = plan.stages.map((stage) => ({
+      ...stage,
+      kernel: (count: number, inputs: readonly Float64Array[], outputs: readonly Float64Array[]) => {
+        stage.kernel(count, inputs, outputs);
+        if (throws && stage.name === 'wing planform') throw new Error('as asked');
+      },
+    }));
+    const evaluator = new Evaluator({ ...plan, stages }, ['mac', 'neutral_point']);
+    const macOf = (first: number) => {
+      evaluator.evaluate(first, 1);
+      return evaluator.columns[0][0];
+    };
+    const expected = new Evaluator(plan, ['mac']);
+    throws = true;
+    expect(() => macOf(0)).toThrow('as asked');
+    expect(() => macOf(1500)).toThrow('as asked');
+    throws = false;
+    for (const first of [1500, 0]) {
+      expected.evaluate(first, 1);
+      expect(macOf(first)).toBe(expected.columns[0][0]);
+    }
+  });
+});
