@@ -16,13 +16,13 @@ export function readStudyText(text: string, file: string): Study {
   return readStudy(text, file, knownFigures);
 }
 
-/** The figures that a study can require, prefer or put in its table: numbers that it gives or that are worked out. */
+/** The figures that a study can require, prefer or put in its table: those that it gives or that are worked out. */
 function knownFigures(study: Study): KnownFigure[] {
   const figures = figuresOfStudy(study, { requirements: [], ranges: [], reasons: [] });
   const workedOut = new Set(buildStages(study).flatMap((stage) => stage.writes));
-  return [...figures.values()].filter(
-    ({ name, formula, kind }) => kind === 'number' && (formula === 'given' || workedOut.has(name)),
-  );
+  return [...figures.values()]
+    .filter(({ name, formula }) => formula === 'given' || workedOut.has(name))
+    .map(({ name, dimension, kind }) => ({ name, dimension, onlyInTable: kind !== 'number' }));
 }
 
 function readBytes(path: string): Uint8Array {

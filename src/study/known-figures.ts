@@ -9,6 +9,8 @@ import type { Span } from './source.ts';
 export interface KnownFigure {
   readonly name: string;
   readonly dimension: Dimension;
+  /** A verdict, a choice or flags: a column of the table, but nothing to require or prefer. */
+  readonly onlyInTable?: boolean;
 }
 
 /** The figures of one study by name; a dotted path is taken for the name it stands for. */
@@ -20,12 +22,39 @@ export class FigureNames {
     this.#byName = figures && new Map(figures.map((figure) => [figure.name, figure]));
   }
 
-  /** The figure of that name; where there is none a fault is told. */
+  /** The number of that name, to be required or preferred; where there is none a fault is told. */
+  findNumber(word: string, span: Span, reading: Reading): KnownFigure | undefined {
+    return this.#find(word, span, reading, (figure) => figure.onlyInTable !== true);
+  }
+
+  /** The figure of that name, to be a column of the table; where there is none a fault is told. */
   find(word: string, span: Span, reading: Reading): KnownFigure | undefined {
+    return this.#find(word, span, reading, () => true);
+  }
+
+  #find(
+    word: string,
+    span: Span,
+    reading: Reading,
+    fits: (figure: KnownFigure) => boolean,
+  ): KnownFigure | undefined {
+    if (!this.#byName) return undefined;
     const name = figureNameOf(word.trim());
-    const found = this.#byName?.get(name);
-    if (found || !this.#byName) return found;
-    const near = nearestKnown(name, this.#byName.keys());
+    const found = this.#byName.get(name);
+    if (found && fits(found)) return found;
+    if (found) {
+      reading.faults.add(
+        'UNKNOWN_FIGURE',
+        span,
+        `'${shorten(word)}' is no number, so it can be a column of the table but not required or preferred.`,
+        'Name a figure with a value, such as tail_area.',
+      );
+      return undefined;
+    }
+    const near = nearestKnown(
+      name,
+      [...this.#byName.values()].filter(fits).map((figure) => figure.name),
+    );
     reading.faults.add(
       'UNKNOWN_FIGURE',
       span,

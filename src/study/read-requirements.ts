@@ -148,7 +148,11 @@ function readRequirement(
   if (map.kind !== 'map') return undefined;
   const word = wordIn(map, 'figure');
   if (word === undefined && valueIn(map, 'figure')) return undefined;
-  const figure = figures.find(word ?? name, word === undefined ? key : valueIn(map, 'figure')!.span, reading);
+  const figure = figures.findNumber(
+    word ?? name,
+    word === undefined ? key : valueIn(map, 'figure')!.span,
+    reading,
+  );
   if (!valueIn(map, 'at_least') && !valueIn(map, 'at_most')) tellNoEdge(map, name, reading);
   if (!figure) return undefined;
   const limit = (edge: 'at_least' | 'at_most') =>
@@ -181,7 +185,7 @@ function customaryScale({ dimension }: KnownFigure, atLeast = 0, atMost = 0): nu
 /** Reads `prefer`, in the order of the file. */
 export function readPreferences(root: SourceNode, figures: FigureNames, reading: Reading): Preference[] {
   return [...(mapIn(root, 'prefer')?.entries ?? [])].flatMap(([key, entry]): Preference[] => {
-    const figure = figures.find(key, entry.key, reading);
+    const figure = figures.findNumber(key, entry.key, reading);
     if (!figure) return [];
     const word = entry.value.kind === 'scalar' ? entry.value.value : undefined;
     if (word === 'less' || word === 'more') return [{ figure: figure.name, want: word }];

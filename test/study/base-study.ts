@@ -49,6 +49,7 @@ export const figures: readonly KnownFigure[] = [
   { name: 'tail_area', dimension: 'area' },
   { name: 'tail_arm', dimension: 'length' },
   { name: 'static_margin_aft', dimension: 'fraction_of_mac' },
+  { name: 'feasible', dimension: 'count', onlyInTable: true },
 ];
 
 export function read(text: string): Study {

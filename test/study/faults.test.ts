@@ -528,6 +528,13 @@ const cases: readonly Case[] = [
     mark: 'wing_aria',
   },
   {
+    what: 'a verdict to prefer',
+    text: edited(['wing_area: less', 'feasible: more']),
+    code: 'UNKNOWN_FIGURE',
+    mark: 'feasible',
+    says: /no number/,
+  },
+  {
     what: 'an unknown column',
     text: `${baseStudy}table: {columns: [wing_span, nothing]}\n`,
     code: 'UNKNOWN_FIGURE',
