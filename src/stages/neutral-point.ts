@@ -98,7 +98,8 @@ export const neutralPointStage: Stage = {
     for (let row = 0; row < count; row++) {
       const ht = tailPosition(arm[row], mac[row], tailMac[row], tailCentre[row]);
       const tail = tailStep(centre[row], ht, share[row], whole[row]);
-      const body = bodyStep(bodySlope[row], whole[row]);
+      // + 0: without a body the step is 0, not −0.
+      const body = bodyStep(bodySlope[row], whole[row]) + 0;
       const hn = neutralPoint(centre[row], tail, body, byHeight[row]);
       byWing[row] = centre[row];
       byTail[row] = tail;
