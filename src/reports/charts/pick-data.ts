@@ -1,4 +1,5 @@
 import type { BuildUp, MacRulerData, MacRulerRow, NeutralPointBuildUpData } from '../../charts/index.ts';
+import type { Figure } from '../../figures/figure.ts';
 import { baselineInputs } from '../../stages/build-stages.ts';
 import { runOnce } from '../../stages/run-once.ts';
 import { captionValue } from '../axis-text.ts';
@@ -8,7 +9,7 @@ import { inputsOfCombination } from '../worksheet.ts';
 
 const percent = 100;
 /** Varied numbers named in a caption at most. */
-const captionNumbers = 4;
+const captionNumbers = 5;
 
 /** One combination to draw, worked out in full. */
 export interface Pick {
@@ -26,25 +27,34 @@ export function picksOf(view: RunView): Pick[] {
     const values = runOnce(stages, baselineInputs(study));
     return [{ label: 'baseline', detail: 'no combination is feasible', values }];
   }
-  return shortlist.map(({ row }) => {
-    const values = runOnce(stages, inputsOfCombination(laidOut, row.combination));
-    return { label: `#${row.combination}`, detail: detailOf(view, values), values };
-  });
+  const worked = shortlist.map(({ row }) => ({
+    label: `#${row.combination}`,
+    values: runOnce(stages, inputsOfCombination(laidOut, row.combination)),
+  }));
+  const named = tellingFigures(
+    view,
+    worked.map(({ values }) => values),
+  );
+  return worked.map((pick) => ({ ...pick, detail: detailOf(view, named, pick.values) }));
 }
 
-/** The varied numbers in words, the CG range left to the drawing. */
-function detailOf({ laidOut, study }: RunView, values: ReadonlyMap<string, number>): string {
+/** The varied numbers by which the picks differ, the CG range left to the drawing; all varied ones when they agree. */
+function tellingFigures({ laidOut }: RunView, picks: readonly ReadonlyMap<string, number>[]): Figure[] {
   const { plan, figures } = laidOut;
   const varied = plan.authorOrder.flatMap((position) => {
     const axis = plan.axes[position];
     return axis.size > 1 && axis.name !== 'cg' ? axis.figures : [];
   });
-  return varied
-    .slice(0, captionNumbers)
-    .flatMap((name) => {
-      const figure = figures.get(name);
-      return figure === undefined ? [] : [captionValue(figure, values.get(name) ?? Number.NaN, study.show)];
-    })
+  const differing = varied.filter((name) => new Set(picks.map((values) => values.get(name))).size > 1);
+  return (differing.length === 0 ? varied : differing).slice(0, captionNumbers).flatMap((name) => {
+    const figure = figures.get(name);
+    return figure === undefined ? [] : [figure];
+  });
+}
+
+function detailOf({ study }: RunView, named: readonly Figure[], values: ReadonlyMap<string, number>): string {
+  return named
+    .map((figure) => captionValue(figure, values.get(figure.name) ?? Number.NaN, study.show))
     .join(', ');
 }
 
