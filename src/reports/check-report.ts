@@ -3,6 +3,7 @@ import { showValue } from '../figures/display.ts';
 import { baselineInputs } from '../stages/build-stages.ts';
 import type { RequirementEdge } from '../stages/requirements.ts';
 import { runOnce } from '../stages/run-once.ts';
+import { figureNameOf } from '../study/inputs.ts';
 import type { Study } from '../study/study.ts';
 import { axisLabel } from './axis-text.ts';
 import { byteText, countText, durationText } from './number-text.ts';
@@ -103,7 +104,7 @@ function axisLines(study: Study, laidOut: LaidOut): string[] {
 
 function assumptionLines(study: Study, { figures }: LaidOut): string[] {
   return study.assumptions.map(({ path, value, source }) => {
-    const figure = figures.get(path.replaceAll(/[.[\]]+/g, '_').replace(/_$/, ''));
+    const figure = figures.get(figureNameOf(path));
     const text =
       typeof value === 'number' && figure !== undefined
         ? showValue(value, figure.dimension, study.show)

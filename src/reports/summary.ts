@@ -1,6 +1,7 @@
 import { showValue } from '../figures/display.ts';
 import type { CaseRow, RunCounts } from '../results/run-queries.ts';
 import { defaultPreferences, preferenceText } from '../selection/shortlist.ts';
+import { figureNameOf } from '../study/inputs.ts';
 import type { Preference } from '../study/study.ts';
 import { axisLabel, figureWords } from './axis-text.ts';
 import { cautions, notAssessed } from './cautions.ts';
@@ -208,7 +209,7 @@ function setup({ view }: SummaryFacts): string {
   );
   const skips = study.skip.map(({ because }) => `- skipped: ${plain(because)}`);
   const assumed = study.assumptions.map(({ path, value, source }) => {
-    const figure = laidOut.figures.get(path.replaceAll(/[.[\]]+/g, '_').replace(/_$/, ''));
+    const figure = laidOut.figures.get(figureNameOf(path));
     const text =
       typeof value === 'string'
         ? plain(value)

@@ -1,12 +1,7 @@
+import { cgFigureName } from '../figures/input-figures.ts';
 import { fractionOfMac, staticMargin, stationOfFraction } from '../methods/neutral-point.ts';
 import type { CgKind, Study } from '../study/study.ts';
 import type { Stage } from './stage.ts';
-
-const inputSuffix: Record<CgKind, string> = {
-  percent_mac: '',
-  station: '_station',
-  behind_mac_leading_edge: '_behind_mac_leading_edge',
-};
 
 /** One end of the loading range as a fraction of the MAC and as a station, from whichever is given. */
 function cgStage(end: 'forward' | 'aft', kind: CgKind): Stage {
@@ -14,7 +9,7 @@ function cgStage(end: 'forward' | 'aft', kind: CgKind): Stage {
   const station = `cg_${end}_station`;
   return {
     name: `${end} CG`,
-    reads: [fraction + inputSuffix[kind], 'mac_leading_edge', 'mac'],
+    reads: [cgFigureName(end, kind), 'mac_leading_edge', 'mac'],
     writes: [kind === 'percent_mac' ? null : fraction, kind === 'station' ? null : station],
     cost: 4,
     kernel: (count, [given, leadingEdge, mac], [asFraction, asStation]) => {

@@ -1,4 +1,5 @@
 /** `require`, `prefer`, `shortlist` and `table`. */
+import { bandRequirements, marginScale } from '../figures/band.ts';
 import type { Dimension } from '../figures/figure.ts';
 import type { FigureNames, KnownFigure } from './known-figures.ts';
 import type { QuantityKind } from './quantities.ts';
@@ -7,11 +8,6 @@ import type { Reading } from './reading.ts';
 import { keySpan, type MapEntry, mapIn, type SourceNode, valueIn, wordIn } from './source.ts';
 import type { Band, Condition, Preference, Requirement } from './study.ts';
 
-/** The two edges of the band are requirements by these names and figures. */
-export const bandRequirements = {
-  lower: { name: 'static_margin.at_least', figure: 'static_margin_aft' },
-  upper: { name: 'static_margin.at_most', figure: 'static_margin_forward' },
-} as const;
 const bandKey = 'static_margin';
 const inRangeKey = 'in_range';
 
@@ -22,8 +18,7 @@ const marginKind: QuantityKind = {
   most: 1,
   limits: 'a static margin',
 };
-/** One unit of shortfall: 1 % of the MAC, or a twentieth of the limit. */
-const marginScale = 0.01;
+/** One unit of shortfall of anything but a margin: a twentieth of the limit. */
 const shareOfLimit = 0.05;
 const smallestLimit = 1e-6;
 

@@ -75,7 +75,7 @@ describe('data behind the charts', () => {
   it('region map: a tied axis whose first number repeats keeps its cells apart', async () => {
     const data = await regionData(view, axis('tail.volume'), axis('cg'));
     expect(data.y.labels).toEqual(['22–31', '22–33', '24–33']);
-    expect([...data.feasibleShare].every((share) => share >= 0 && share <= 1)).toBe(true);
+    expect(Array.from(data.feasibleShare).every((share) => share >= 0 && share <= 1)).toBe(true);
     // Seven spans a cell: shares are sevenths.
     for (const share of Array.from(data.feasibleShare)) expect((share * 7) % 1).toBeCloseTo(0, 9);
     // A more aft CG never has the better margin.
