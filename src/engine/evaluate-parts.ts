@@ -1,6 +1,7 @@
 import { Piscina } from 'piscina';
 import { MachineError } from '../errors.ts';
 import type { Part } from '../plan/plan.ts';
+import { builtFile } from './built-file.ts';
 import type { EvaluatePart, PartAnswer, WorkerSetup } from './messages.ts';
 
 /** Tasks waiting per worker: one in hand and one in reach keeps a worker busy. */
@@ -31,7 +32,7 @@ export interface EvaluatedParts {
  */
 export async function evaluateParts(job: PartsToEvaluate): Promise<EvaluatedParts> {
   const pool = new Piscina<EvaluatePart, PartAnswer>({
-    filename: job.workerFile ?? workerFile(),
+    filename: job.workerFile ?? builtFile('worker'),
     minThreads: job.workers,
     maxThreads: job.workers,
     workerData: job.setup,
@@ -53,9 +54,13 @@ export async function evaluateParts(job: PartsToEvaluate): Promise<EvaluatedPart
     }
   }
 
+  // Workers that are starting do not keep the program alive: without this it would end, silently,
+  // while the successor of a dead worker is not there yet.
+  const awake = setInterval(() => {}, 60_000);
   try {
     await Promise.all(Array.from({ length: job.workers * tasksPerWorker }, takeParts));
   } finally {
+    clearInterval(awake);
     await pool.destroy();
   }
   if (fault !== undefined) throw fault;
@@ -77,10 +82,4 @@ async function evaluateWithRetry(
     }
   }
   return undefined;
-}
-
-/** Workers run from the build, also when the main thread runs from source (tests). */
-function workerFile(): string {
-  const built = import.meta.url.endsWith('.ts') ? '../../.build/engine/worker.js' : './worker.js';
-  return new URL(built, import.meta.url).href;
 }

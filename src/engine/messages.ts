@@ -1,5 +1,6 @@
 import type { MachineFaultCode } from '../errors.ts';
 import type { Part } from '../plan/plan.ts';
+import type { PartCopy } from '../results/assemble.ts';
 import type { Study } from '../study/study.ts';
 
 /** What every worker is given when it starts. */
@@ -32,3 +33,25 @@ export interface PartNotWritten {
 }
 
 export type PartAnswer = PartDone | PartNotWritten;
+
+/** Main thread → worker: copy one part into the cases files. */
+export interface CopyPart {
+  readonly kind: 'copy_part';
+  readonly copy: PartCopy;
+}
+
+/** Worker → main thread: the part's bytes are in their places, if it was as it had been written. */
+export interface PartCopied {
+  readonly kind: 'part_copied';
+  readonly whole: boolean;
+}
+
+/** Worker → main thread: the machine refused to read or write. */
+export interface PartNotCopied {
+  readonly kind: 'part_not_copied';
+  readonly code: MachineFaultCode;
+  readonly message: string;
+  readonly remedy: string;
+}
+
+export type CopyAnswer = PartCopied | PartNotCopied;

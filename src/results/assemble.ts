@@ -1,12 +1,12 @@
-import { readdirSync, rmSync } from 'node:fs';
+import { closeSync, openSync, readdirSync, rmSync, writeSync } from 'node:fs';
 import { join } from 'node:path';
 import { MachineError } from '../errors.ts';
 import type { TableColumn } from '../figures/figure.ts';
 import { AtomicFile, syncFolder } from './atomic-file.ts';
-import { CsvBlockWriter } from './csv-block.ts';
+import type { CasesFilePlan, Piece } from './cases-layout.ts';
+import { layOutCases } from './cases-layout.ts';
 import { writeFault } from './machine-fault.ts';
-import { type GroupRecord, parquetFooter, parquetMagic } from './parquet-schema.ts';
-import { type BlockRecord, type PartInfo, streamPart } from './part-files.ts';
+import { type PartInfo, streamPart } from './part-files.ts';
 
 /** Most data rows of one cases file, so that a spreadsheet (1,048,576 rows, from memory) opens it. */
 export const rowsPerFile = 1_000_000;
@@ -27,17 +27,29 @@ export interface AssembledCases {
   readonly parquet: readonly CasesFile[];
 }
 
+/** One part to be copied into the cases files; plain data, so that a worker thread can be asked. */
+export interface PartCopy {
+  readonly part: PartInfo;
+  readonly pieces: readonly Piece[];
+  /** Temporary paths of the files that pieces name by index. */
+  readonly files: readonly string[];
+}
+
 export interface AssembleOptions {
   readonly rowsPerFile?: number;
+  /** Copies one part, false when it is not as it was written; on this thread when left out. */
+  readonly copy?: (copy: PartCopy) => boolean | Promise<boolean>;
+  /** Parts being copied at a time. */
+  readonly atOnce?: number;
   /** Told after each part; may wait. */
   readonly onPart?: (part: PartInfo) => void | Promise<void>;
 }
 
 /**
  * Joins parts 0, 1, 2 … into the cases files of a run folder by copying bytes, and removes older
- * cases files. CSV files are cut at exactly `rowsPerFile` rows, Parquet files at the last block
- * that ends before it, so the bytes depend on the blocks alone and not on how parts held them.
- * A part that does not match its hash is a MachineError READ_FAILED and leaves no new files.
+ * cases files. Every byte's place is known beforehand (`layOutCases`), so parts are copied in any
+ * order, several at a time. A part that does not match its hash is a MachineError READ_FAILED and
+ * leaves no new files.
  */
 export async function assembleCases(
   folder: string,
@@ -48,58 +60,90 @@ export async function assembleCases(
   parts.forEach((part, k) => {
     if (part.part !== k) throw new Error(`part ${k} is missing`);
   });
-  const limit = options.rowsPerFile ?? rowsPerFile;
-  const total = parts.reduce((sum, { rows }) => sum + rows, 0);
-  const csv = new CsvFiles(folder, new CsvBlockWriter(columns).header(), limit, total > limit);
-  const parquet = new ParquetFiles(folder, columns, limit, total > limit);
-  const buffer = new Uint8Array(copiedAtOnce);
+  const layout = layOutCases(parts, columns, options.rowsPerFile ?? rowsPerFile);
+  const plans = [...layout.csv, ...layout.parquet];
+  const files: AtomicFile[] = [];
   try {
-    for (const part of parts) {
-      copyPart(part, buffer, csv, parquet);
-      await options.onPart?.(part);
-    }
-    const files = { csv: csv.finish(), parquet: parquet.finish() };
-    removeOlder(folder, [...files.csv, ...files.parquet]);
-    return files;
+    for (const plan of plans) files.push(openFile(folder, plan));
+    const paths = files.map((file) => file.temporary);
+    await copyAll(
+      parts.map((part, k) => ({ part, pieces: layout.pieces[k], files: paths })),
+      options,
+    );
+    for (const file of files) file.commit();
   } catch (error) {
-    csv.abandon();
-    parquet.abandon();
+    for (const file of files) file.abandon();
     throw error;
+  }
+  const told = ({ name, rows, bytes }: CasesFilePlan): CasesFile => ({ name, rows, bytes });
+  const cases = { csv: layout.csv.map(told), parquet: layout.parquet.map(told) };
+  removeOlder(folder, plans);
+  return cases;
+}
+
+/** Opens one cases file under its temporary name, with what stands before and behind the parts' bytes. */
+function openFile(folder: string, { name, bytes, head, foot }: CasesFilePlan): AtomicFile {
+  const file = new AtomicFile(join(folder, name));
+  file.write(head);
+  file.writeAt(foot, bytes - foot.length);
+  return file;
+}
+
+async function copyAll(copies: readonly PartCopy[], options: AssembleOptions): Promise<void> {
+  const { copy = copyPart, atOnce = 1, onPart } = options;
+  const queue = [...copies];
+  let failed = false;
+  const takeCopies = async () => {
+    for (let next = queue.shift(); next !== undefined && !failed; next = queue.shift()) {
+      try {
+        if (!(await copy(next))) throw damagedPart(next.part);
+        await onPart?.(next.part);
+      } catch (error) {
+        failed = true;
+        throw error;
+      }
+    }
+  };
+  const outcomes = await Promise.allSettled(Array.from({ length: atOnce }, takeCopies));
+  const fault = outcomes.find((outcome) => outcome.status === 'rejected');
+  if (fault !== undefined) throw fault.reason;
+}
+
+/** Copies the pieces of one part to their places, checking its hash on the way. @returns whether it was whole */
+export function copyPart({ part, pieces, files }: PartCopy): boolean {
+  const handles = new Map<number, number>();
+  let target = '';
+  try {
+    for (const { file } of pieces) {
+      target = files[file];
+      if (!handles.has(file)) handles.set(file, openSync(target, 'r+'));
+    }
+    let read = 0;
+    let next = 0;
+    return streamPart(part, new Uint8Array(copiedAtOnce), (bytes) => {
+      for (let done = 0; done < bytes.length && next < pieces.length; ) {
+        const { from, bytes: length, file, at } = pieces[next];
+        const inPiece = read + done - from;
+        const taken = Math.min(length - inPiece, bytes.length - done);
+        target = files[file];
+        writeWhole(handles.get(file) as number, bytes.subarray(done, done + taken), at + inPiece);
+        done += taken;
+        if (inPiece + taken === length) next++;
+      }
+      read += bytes.length;
+    });
+  } catch (error) {
+    throw writeFault(error, target);
+  } finally {
+    for (const handle of handles.values()) closeSync(handle);
   }
 }
 
-/** Deals the bytes of a part out to its blocks' two targets. */
-function copyPart(part: PartInfo, buffer: Uint8Array, csv: CsvFiles, parquet: ParquetFiles): void {
-  const stretches = part.blocks.flatMap((block) => [
-    {
-      bytes: block.csvBytes,
-      begin: () => csv.beginBlock(block),
-      take: (bytes: Uint8Array) => csv.take(bytes),
-    },
-    {
-      bytes: block.group.bytes,
-      begin: () => parquet.beginGroup(block.group),
-      take: (bytes: Uint8Array) => parquet.take(bytes),
-    },
-  ]);
-  let next = 0;
-  let left = 0;
-  const whole = streamPart(part, buffer, (bytes) => {
-    for (let done = 0; done < bytes.length; ) {
-      if (left === 0) {
-        // Behind the last block stands the part's trailer.
-        if (next === stretches.length) return;
-        stretches[next].begin();
-        left = stretches[next].bytes;
-        next++;
-      }
-      const taken = Math.min(left, bytes.length - done);
-      stretches[next - 1].take(bytes.subarray(done, done + taken));
-      done += taken;
-      left -= taken;
-    }
-  });
-  if (!whole) throw damagedPart(part);
+/** One call may write less than asked for. */
+function writeWhole(handle: number, bytes: Uint8Array, at: number): void {
+  for (let done = 0; done < bytes.length; ) {
+    done += writeSync(handle, bytes, done, bytes.length - done, at + done);
+  }
 }
 
 function damagedPart(part: PartInfo): MachineError {
@@ -110,140 +154,7 @@ function damagedPart(part: PartInfo): MachineError {
   );
 }
 
-/** A row of files of one kind, written under temporary names and put in place all at the end. */
-class NumberedFiles {
-  protected file: AtomicFile;
-  protected rows = 0;
-  readonly #done: { file: AtomicFile; rows: number }[] = [];
-
-  constructor(
-    readonly folder: string,
-    readonly ending: 'csv' | 'parquet',
-    readonly head: Uint8Array,
-    readonly numbered: boolean,
-  ) {
-    this.file = this.#next();
-  }
-
-  /** Closes the present file and begins the next. */
-  protected turn(): void {
-    this.#done.push({ file: this.file, rows: this.rows });
-    this.rows = 0;
-    this.file = this.#next();
-  }
-
-  #next(): AtomicFile {
-    const number = String(this.#done.length + 1).padStart(4, '0');
-    const name = this.numbered ? `cases-${number}.${this.ending}` : `cases.${this.ending}`;
-    const file = new AtomicFile(join(this.folder, name));
-    file.write(this.head);
-    return file;
-  }
-
-  finish(): CasesFile[] {
-    const all = [...this.#done, { file: this.file, rows: this.rows }];
-    for (const { file } of all) file.commit();
-    return all.map(({ file, rows }) => ({
-      name: file.path.slice(this.folder.length).replace(/^[\\/]/, ''),
-      rows,
-      bytes: file.size,
-    }));
-  }
-
-  abandon(): void {
-    for (const { file } of this.#done) file.abandon();
-    this.file.abandon();
-  }
-}
-
-const quote = 34;
-const lineFeed = 10;
-
-class CsvFiles extends NumberedFiles {
-  /** Rows of the block that are not yet in a file, and whether the copy stands inside quotes. */
-  #blockRows = 0;
-  #quoted = false;
-
-  constructor(
-    folder: string,
-    header: Uint8Array,
-    readonly limit: number,
-    numbered: boolean,
-  ) {
-    super(folder, 'csv', header, numbered);
-  }
-
-  beginBlock(block: BlockRecord): void {
-    // A whole block fits: its rows need no counting.
-    if (this.rows === this.limit) this.turn();
-    this.#quoted = false;
-    this.#blockRows = 0;
-    if (this.rows + block.rows <= this.limit) this.rows += block.rows;
-    else this.#blockRows = block.rows;
-  }
-
-  take(bytes: Uint8Array): void {
-    if (this.#blockRows === 0) this.file.write(bytes);
-    else this.#takeCounting(bytes);
-  }
-
-  /** Counts rows by their line ends (those inside quotes are text) and turns to the next file when one is full. */
-  #takeCounting(bytes: Uint8Array): void {
-    let start = 0;
-    for (let i = 0; i < bytes.length; i++) {
-      const byte = bytes[i];
-      if (byte === quote) this.#quoted = !this.#quoted;
-      if (byte !== lineFeed || this.#quoted) continue;
-      this.rows++;
-      this.#blockRows--;
-      if (this.rows < this.limit || this.#blockRows === 0) continue;
-      this.file.write(bytes.subarray(start, i + 1));
-      start = i + 1;
-      this.turn();
-    }
-    this.file.write(bytes.subarray(start));
-  }
-}
-
-class ParquetFiles extends NumberedFiles {
-  #groups: { at: number; group: GroupRecord }[] = [];
-
-  constructor(
-    folder: string,
-    readonly columns: readonly TableColumn[],
-    readonly limit: number,
-    numbered: boolean,
-  ) {
-    super(folder, 'parquet', parquetMagic, numbered);
-  }
-
-  beginGroup(group: GroupRecord): void {
-    if (this.rows > 0 && this.rows + group.rows > this.limit) this.turn();
-    this.#groups.push({ at: this.file.size, group });
-    this.rows += group.rows;
-  }
-
-  take(bytes: Uint8Array): void {
-    this.file.write(bytes);
-  }
-
-  protected override turn(): void {
-    this.#writeFooter();
-    super.turn();
-  }
-
-  override finish(): CasesFile[] {
-    this.#writeFooter();
-    return super.finish();
-  }
-
-  #writeFooter(): void {
-    this.file.write(parquetFooter(this.columns, this.#groups));
-    this.#groups = [];
-  }
-}
-
-function removeOlder(folder: string, kept: readonly CasesFile[]): void {
+function removeOlder(folder: string, kept: readonly { readonly name: string }[]): void {
   const names = new Set(kept.map(({ name }) => name));
   try {
     for (const name of readdirSync(folder)) {

@@ -30,15 +30,16 @@ function host(): string {
 export class AtomicFile {
   /** Bytes written so far. */
   size = 0;
-  readonly #temporary: string;
+  /** Where the bytes are until `commit`; others may write into it at places of their own. */
+  readonly temporary: string;
   readonly #handle: number;
   #open = true;
 
   constructor(readonly path: string) {
     const unique = [host(), process.pid, randomBytes(6).toString('hex')].join('.');
-    this.#temporary = `${path}.${unique}${temporarySuffix}`;
+    this.temporary = `${path}.${unique}${temporarySuffix}`;
     try {
-      this.#handle = openSync(this.#temporary, 'wx');
+      this.#handle = openSync(this.temporary, 'wx');
     } catch (error) {
       throw writeFault(error, path);
     }
@@ -54,12 +55,22 @@ export class AtomicFile {
     this.size += bytes.length;
   }
 
+  /** Writes bytes at a place of their own, which may lie beyond what is written so far. */
+  writeAt(bytes: Uint8Array, at: number): void {
+    this.#guard(() => {
+      for (let done = 0; done < bytes.length; ) {
+        done += writeSync(this.#handle, bytes, done, bytes.length - done, at + done);
+      }
+    });
+    this.size = Math.max(this.size, at + bytes.length);
+  }
+
   /** Puts the file in its place, over any older one. */
   commit(): void {
     this.#guard(() => {
       fsyncSync(this.#handle);
       this.#close();
-      renameSync(this.#temporary, this.path);
+      renameSync(this.temporary, this.path);
       syncFolder(dirname(this.path));
     });
   }
@@ -67,7 +78,7 @@ export class AtomicFile {
   /** Removes what was written; does nothing after `commit`. */
   abandon(): void {
     this.#close();
-    rmSync(this.#temporary, { force: true });
+    rmSync(this.temporary, { force: true });
   }
 
   #close(): void {
