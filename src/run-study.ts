@@ -3,13 +3,14 @@
  *
  *   1  read and check the study                     study/
  *   2  lay out its combinations and stages          plan/, stages/
- *   3  estimate time and disk; refuse a full disk   engine/estimate.ts
- *   4  open the run folder, or go on in it          engine/run-sitting.ts
+ *   3  look into the run folder: go on, or refuse   engine/run-sitting.ts
+ *   4  estimate time and disk; refuse a full disk   engine/estimate.ts
  *   5  evaluate the missing parts on workers        engine/
  *   6  put the table together                       results/
  *   7  count, choose the shortlist, draw, sum up    selection/, charts/, reports/
  */
 import { join, parse } from 'node:path';
+import { assembleTable } from './engine/assemble-table.ts';
 import { estimateRun } from './engine/estimate.ts';
 import { evaluateParts } from './engine/evaluate-parts.ts';
 import { layOut } from './engine/lay-out.ts';
@@ -19,7 +20,6 @@ import { MachineError } from './errors.ts';
 import { blockCount, blockSize, partsOf } from './plan/plan.ts';
 import { readStudyFile } from './read-study-file.ts';
 import { writeReports } from './reports/write-reports.ts';
-import { assembleCases } from './results/assemble.ts';
 import { checkRoom, freeBytes } from './results/disk.ts';
 import { findParts, removeParts } from './results/part-files.ts';
 import { runPaths } from './results/run-folder.ts';
@@ -61,7 +61,8 @@ export async function runStudy(options: RunOptions, reporter: Reporter): Promise
 
   if (sitting.state === 'evaluating') {
     const parts = partsOf(plan, sitting.blocksPerPart);
-    const present = new Set(findParts(paths.parts, columns).finished.map(({ part }) => part));
+    const finished = findParts(paths.parts, columns).finished;
+    const present = new Set(finished.map(({ part }) => part));
     const missing = parts.filter(({ number }) => !present.has(number));
     const combinationsIn = (blocks: number) => Math.min(blocks * blockSize, plan.combinations);
     let done = combinationsIn(
@@ -69,17 +70,20 @@ export async function runStudy(options: RunOptions, reporter: Reporter): Promise
     );
 
     const estimate = estimateRun(laidOut, (plan.combinations - done) / plan.combinations, options.workers);
+    const bytesThere = finished.reduce((sum, { bytes }) => sum + bytes, 0);
+    const bytesNeeded = Math.max(0, estimate.bytesNeeded - bytesThere);
     reporter.planned({
       title: study.title,
       folder,
       combinations: plan.combinations,
       alreadyDone: done,
       workers: options.workers,
-      bytesNeeded: estimate.bytesNeeded,
+      bytesNeeded,
       bytesFree: freeBytes(folder),
       secondsExpected: estimate.seconds,
     });
-    checkRoom(folder, estimate.bytesNeeded);
+    checkRoom(folder, bytesNeeded);
+    sitting.begin();
 
     const { stopped, lost } = await evaluateParts({
       setup: { study, partsFolder: paths.parts },
@@ -101,10 +105,15 @@ export async function runStudy(options: RunOptions, reporter: Reporter): Promise
     }
 
     reporter.step('Putting the table together');
-    const cases = await assembleCases(folder, findParts(paths.parts, columns).finished, columns);
+    const cases = await assembleTable(
+      folder,
+      findParts(paths.parts, columns).finished,
+      columns,
+      options.workers,
+    );
     sitting.assembled(cases);
-    removeParts(paths.parts);
   }
+  removeParts(paths.parts);
 
   reporter.step(
     options.charts

@@ -4,7 +4,7 @@ import { UsageError } from '../errors.ts';
 import { blockSize } from '../plan/plan.ts';
 import type { AssembledCases } from '../results/assemble.ts';
 import { sweepTemporaryFiles } from '../results/atomic-file.ts';
-import { findParts, makeFolder } from '../results/part-files.ts';
+import { findParts, makeFolder, removeParts } from '../results/part-files.ts';
 import type { RunRecord } from '../results/run-folder.ts';
 import { readRun, runPaths, thisMachine, writeRun } from '../results/run-folder.ts';
 import { studyIdentity } from '../study/identity.ts';
@@ -30,6 +30,8 @@ export interface Sitting {
   readonly state: 'evaluating' | 'reporting' | 'finished';
   readonly blocksPerPart: number;
   record(): RunRecord;
+  /** Evaluation begins: from here on the folder is this study's. */
+  begin(): void;
   /** The sitting ends before the table is there, or evaluation is over: time so far is kept. */
   pause(): void;
   assembled(cases: AssembledCases): void;
@@ -40,13 +42,11 @@ export function openSitting(request: SittingRequest): Sitting {
   const { folder, study, afresh, note } = request;
   if (afresh) discardRun(folder);
   const earlier = existsSync(runPaths(folder).record) ? readRun(folder) : undefined;
-  if (earlier === undefined) refuseForeignFolder(folder);
-  else refuseOtherStudy(folder, earlier, study);
-  makeFolder(runPaths(folder).parts);
-  sweepTemporaryFiles(folder);
-  sweepTemporaryFiles(runPaths(folder).parts);
+  if (earlier === undefined) claimFolder(folder);
+  else refuseOtherStudy(folder, earlier, request);
+  if (existsSync(folder)) sweepTemporaryFiles(folder);
 
-  let record = earlier ?? newRecord(request);
+  let record = earlier === undefined ? newRecord(request) : { ...earlier, studyText: study.text };
   const startedAt = performance.now();
   const secondsBefore = record.seconds;
   const write = (changes: Partial<RunRecord>) => {
@@ -55,19 +55,26 @@ export function openSitting(request: SittingRequest): Sitting {
     writeRun(folder, record);
   };
 
-  if (earlier?.status === 'finished') {
+  const state = stateOf(earlier, study);
+  if (state === 'finished') {
     note(
       `${folder} holds this study, finished. --afresh evaluates it again; aftlimit charts draws its charts again.`,
     );
-  } else {
+  } else if (state === 'reporting') {
+    if (earlier?.status === 'finished') note(`${folder} holds the table already; its reports are made anew.`);
     write({ status: 'running' });
+  } else if (existsSync(runPaths(folder).parts)) {
+    sweepTemporaryFiles(runPaths(folder).parts);
     removeDamagedParts(request);
   }
   return {
-    state:
-      record.status === 'finished' ? 'finished' : record.cases === undefined ? 'evaluating' : 'reporting',
+    state,
     blocksPerPart: record.blocksPerPart,
     record: () => record,
+    begin: () => {
+      makeFolder(runPaths(folder).parts);
+      write({ status: 'running' });
+    },
     pause: () => write({ status: 'interrupted' }),
     assembled: (cases) =>
       write({
@@ -80,6 +87,12 @@ export function openSitting(request: SittingRequest): Sitting {
       return record;
     },
   };
+}
+
+/** A finished run whose study has other words or preferences since gets new reports; its table stays. */
+function stateOf(earlier: RunRecord | undefined, study: Study): Sitting['state'] {
+  if (earlier?.cases === undefined) return 'evaluating';
+  return earlier.status === 'finished' && earlier.studyText === study.text ? 'finished' : 'reporting';
 }
 
 function newRecord({ study, laidOut, blocksPerPart }: SittingRequest): RunRecord {
@@ -102,8 +115,9 @@ function newRecord({ study, laidOut, blocksPerPart }: SittingRequest): RunRecord
   };
 }
 
-function refuseOtherStudy(folder: string, record: RunRecord, study: Study): void {
-  const sameStudy = record.studyHash === studyIdentity(study);
+function refuseOtherStudy(folder: string, record: RunRecord, { study, laidOut }: SittingRequest): void {
+  const sameColumns = record.columns.join() === laidOut.columns.map(({ name }) => name).join();
+  const sameStudy = record.studyHash === studyIdentity(study) && sameColumns;
   if (sameStudy && record.version === program.version && record.blockSize === blockSize) return;
   const what = sameStudy
     ? `was begun by version ${record.version} of the program`
@@ -115,11 +129,17 @@ function refuseOtherStudy(folder: string, record: RunRecord, study: Study): void
   );
 }
 
-/** A folder with files that no run made is not written into. */
-function refuseForeignFolder(folder: string): void {
+/**
+ * A folder with files that no run made is not written into. Parts without a record may be any
+ * study's: they are removed.
+ */
+function claimFolder(folder: string): void {
   if (!existsSync(folder)) return;
   const names = readdirSync(folder).filter((name) => name !== 'parts' && !name.endsWith('.tmp'));
-  if (names.length === 0) return;
+  if (names.length === 0) {
+    removeParts(runPaths(folder).parts);
+    return;
+  }
   throw new UsageError(
     'OTHER_STUDY_IN_FOLDER',
     `${folder} holds files, ${names[0]} among them, but no run.`,
