@@ -39,6 +39,7 @@ export async function evaluateParts(job: PartsToEvaluate): Promise<EvaluatedPart
     recordTiming: false,
     concurrentTasksPerWorker: 1,
   });
+  const none = noWorkersLeft(pool);
   const queue = [...job.parts];
   const lost: number[] = [];
   let fault: MachineError | undefined;
@@ -47,7 +48,7 @@ export async function evaluateParts(job: PartsToEvaluate): Promise<EvaluatedPart
     for (;;) {
       const part = job.stop.aborted || fault !== undefined ? undefined : queue.shift();
       if (part === undefined) return;
-      const answer = await evaluateWithRetry(pool, part, job.onNote);
+      const answer = await evaluateWithRetry(pool, none, part, job.onNote);
       if (answer === undefined) lost.push(part.number);
       else if (answer.kind === 'part_done') job.onPart(part);
       else fault ??= new MachineError(answer.code, answer.message, answer.remedy);
@@ -67,19 +68,42 @@ export async function evaluateParts(job: PartsToEvaluate): Promise<EvaluatedPart
   return { stopped: job.stop.aborted && queue.length > 0, lost: lost.sort((a, b) => a - b) };
 }
 
+/**
+ * A signal for parts that wait in a pool without workers: where workers die as they start, the pool
+ * begins no more of its own accord, and the parts would wait for ever. A new task makes it try again.
+ */
+function noWorkersLeft(pool: Piscina<EvaluatePart, PartAnswer>): () => AbortSignal {
+  let waiting = new AbortController();
+  pool.on('workerDestroy', () => {
+    // The pool takes the worker off its list, and begins the next one, after this event.
+    setImmediate(() => {
+      if (pool.threads.length > 0) return;
+      waiting.abort();
+      waiting = new AbortController();
+    });
+  });
+  return () => waiting.signal;
+}
+
 async function evaluateWithRetry(
   pool: Piscina<EvaluatePart, PartAnswer>,
+  noWorkers: () => AbortSignal,
   part: Part,
   note: (text: string) => void,
 ): Promise<PartAnswer | undefined> {
   for (let attempt = 1; attempt <= attemptsPerPart; attempt++) {
     try {
-      return await pool.run({ kind: 'evaluate_part', part });
+      return await pool.run({ kind: 'evaluate_part', part }, { signal: noWorkers() });
     } catch (error) {
-      const reason = error instanceof Error && error.message !== '' ? error.message : 'no reason given';
+      const reason = reasonOf(error);
       const next = attempt < attemptsPerPart ? 'it is tried once more' : 'it is left out';
       note(`The worker on part ${part.number} failed (${reason}); ${next}.`);
     }
   }
   return undefined;
+}
+
+function reasonOf(error: unknown): string {
+  if (!(error instanceof Error) || error.message === '') return 'no reason given';
+  return error.name === 'AbortError' ? 'workers die as they start' : error.message;
 }
