@@ -1,6 +1,16 @@
-import { existsSync, readdirSync, readFileSync, truncateSync, writeFileSync } from 'node:fs';
+import {
+  cpSync,
+  existsSync,
+  mkdtempSync,
+  readdirSync,
+  readFileSync,
+  rmSync,
+  truncateSync,
+  writeFileSync,
+} from 'node:fs';
+import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { exitCodes } from '../../src/errors.ts';
 import { readRun } from '../../src/results/run-folder.ts';
 import {
@@ -15,12 +25,18 @@ import {
   writeStudy,
 } from './run-folder.ts';
 
-/** Hashes of the table when nothing comes in between. */
-async function undisturbed(folder: string, study: string): Promise<Record<string, string>> {
-  const { outcome } = await runHere(study, join(folder, 'undisturbed'));
-  expect(outcome).toBe('finished');
-  return hashesOfTable(join(folder, 'undisturbed', 'study'));
-}
+/** The study, and its run with nothing coming in between. */
+const undisturbed = mkdtempSync(join(tmpdir(), 'aftlimit-undisturbed-'));
+const study = writeStudy(undisturbed, narrowTable);
+let expected: Record<string, string> = {};
+
+beforeAll(async () => {
+  expect((await runHere(study, undisturbed)).outcome).toBe('finished');
+  expected = hashesOfTable(join(undisturbed, 'study'));
+  expect(Object.keys(expected)).toEqual(['cases.csv', 'cases.parquet']);
+});
+
+afterAll(() => rmSync(undisturbed, { recursive: true, force: true }));
 
 /** Pseudo-random numbers 0…1 (Park and Miller's minimal standard, from memory); moments of a kill, no more. */
 function* randomNumbers(seed: number): Generator<number, never> {
@@ -34,8 +50,6 @@ function* randomNumbers(seed: number): Generator<number, never> {
 describe('a run that is killed', () => {
   it('at any moment and started again gives the same bytes', async () => {
     const folder = temporaryFolder();
-    const study = writeStudy(folder, narrowTable);
-    const expected = await undisturbed(folder, study);
     const random = randomNumbers(11);
     const args = [
       'run',
@@ -63,11 +77,11 @@ describe('a run that is killed', () => {
         if (line.includes(`"event":"${event}"`)) setTimeout(() => child.kill('SIGKILL'), delay);
       });
       if (ended.signal === 'SIGKILL') killed++;
-      else expect(ended).toMatchObject({ code: exitCodes.done });
+      else expect(ended.code, ended.stderr).toBe(exitCodes.done);
     }
     expect(killed).toBeGreaterThan(0);
     const last = await startProgram(args);
-    expect(last).toMatchObject({ code: exitCodes.done });
+    expect(last.code, last.stderr).toBe(exitCodes.done);
     const run = join(folder, 'killed', 'study');
     expect(hashesOfTable(run)).toEqual(expected);
     expect(filesOf(run).filter((name) => name.includes('.tmp') || name.startsWith('parts'))).toEqual([]);
@@ -75,16 +89,14 @@ describe('a run that is killed', () => {
 
   it('between table and reports goes on with the reports and clears the parts', async () => {
     const folder = temporaryFolder();
-    const study = writeStudy(folder, narrowTable);
-    const expected = await undisturbed(folder, study);
-    const run = join(folder, 'undisturbed', 'study');
+    const run = join(folder, 'study');
+    cpSync(join(undisturbed, 'study'), run, { recursive: true });
     const record = JSON.parse(readFileSync(join(run, 'run.json'), 'utf8'));
     delete record.finished;
     writeFileSync(join(run, 'run.json'), JSON.stringify({ ...record, status: 'running' }));
     await runInPart(study, join(folder, 'parts-only'));
-    const { cpSync } = await import('node:fs');
     cpSync(join(folder, 'parts-only', 'study', 'parts'), join(run, 'parts'), { recursive: true });
-    const { outcome, told } = await runHere(study, join(folder, 'undisturbed'));
+    const { outcome, told } = await runHere(study, folder);
     expect(outcome).toBe('finished');
     expect(told.progress).toEqual([]);
     expect(hashesOfTable(run)).toEqual(expected);
@@ -96,8 +108,6 @@ describe('a run that is killed', () => {
 describe('a run that is stopped', () => {
   it('by Ctrl-C ends with 130, says what is saved, and goes on to the same bytes', async () => {
     const folder = temporaryFolder();
-    const study = writeStudy(folder, narrowTable);
-    const expected = await undisturbed(folder, study);
     const args = [
       'run',
       study,
@@ -136,30 +146,33 @@ describe('a run that is stopped', () => {
   });
 });
 
-describe('a damaged part', () => {
-  it.each([
-    ['cut short', (path: string) => truncateSync(path, 5000)],
-    ['emptied', (path: string) => truncateSync(path, 0)],
-    [
-      'with one bit turned',
-      (path: string) => {
-        const bytes = readFileSync(path);
-        bytes[Math.floor(bytes.length / 2)] ^= 1;
-        writeFileSync(path, bytes);
-      },
-    ],
-  ])('%s is found, told and evaluated again', async (_, damage) => {
+describe('damaged parts', () => {
+  const damages: readonly ((path: string) => void)[] = [
+    (path) => truncateSync(path, 5000),
+    (path) => truncateSync(path, 0),
+    (path) => {
+      const bytes = readFileSync(path);
+      bytes[Math.floor(bytes.length / 2)] ^= 1;
+      writeFileSync(path, bytes);
+    },
+  ];
+
+  it('cut short, emptied or with one bit turned are found, told and evaluated again', async () => {
     const folder = temporaryFolder();
-    const study = writeStudy(folder, narrowTable);
-    const expected = await undisturbed(folder, study);
-    await runInPart(study, folder, 2);
+    await runInPart(study, folder, damages.length);
     const parts = join(folder, 'study', 'parts');
-    const before = readdirSync(parts).filter((name) => name.endsWith('.part'));
-    expect(before.length).toBeGreaterThanOrEqual(2);
-    damage(join(parts, before[1]));
+    const paths = readdirSync(parts)
+      .filter((name) => name.endsWith('.part'))
+      .map((name) => join(parts, name));
+    expect(paths.length).toBeGreaterThanOrEqual(damages.length);
+    damages.forEach((damage, k) => {
+      damage(paths[k]);
+    });
     const { told } = await runHere(study, folder);
-    expect(told.notes).toEqual([`${join(parts, before[1])} is damaged and is evaluated again.`]);
-    expect(told.alreadyDone).toEqual([(before.length - 1) * 16_384]);
+    expect(told.notes).toEqual(
+      paths.slice(0, damages.length).map((path) => `${path} is damaged and is evaluated again.`),
+    );
+    expect(told.alreadyDone).toEqual([(paths.length - damages.length) * 16_384]);
     expect(hashesOfTable(join(folder, 'study'))).toEqual(expected);
   });
 });

@@ -18,7 +18,6 @@ it('the table has the same bytes for any number of workers and any part size', a
     [1, 16_384],
     [2, 32_768],
     [3, 50_000],
-    [3, 16_384],
   ]) {
     const out = join(folder, `${workers}-${partSize}`);
     const { outcome, told } = await runHere(study, out, { workers, partSize });
