@@ -49,7 +49,10 @@ export function machRatioStage({ methods }: Pick<Study, 'methods'>): Stage {
   };
 }
 
-/** Downwash gradient by both published forms, and the one used. Empty where the tail is not behind the wing. */
+/**
+ * Downwash gradient by both published forms, and the one used. Empty where the tail is not behind the wing;
+ * Torenbeek's form also where the wing is hollower than a triangle, so that its equivalent taper is 0.
+ */
 export function downwashStage({ methods }: Pick<Study, 'methods'>): Stage {
   const useTorenbeek = methods.downwash === 'torenbeek';
   return {
@@ -78,7 +81,10 @@ export function downwashStage({ methods }: Pick<Study, 'methods'>): Stage {
         const l = wakeLength[row] > 0 ? arm[row] : Number.NaN;
         const b = span[row];
         wake[row] = wakePlaneHeight(height[row], wakeLength[row], alpha[row], cl[row], A[row]);
-        byT[row] = torenbeekDownwashGradient(a[row], A[row], taper[row], (2 * l) / b, (2 * wake[row]) / b);
+        byT[row] =
+          taper[row] > 0
+            ? torenbeekDownwashGradient(a[row], A[row], taper[row], (2 * l) / b, (2 * wake[row]) / b)
+            : Number.NaN;
         byH[row] = handbookDownwashGradient(
           A[row],
           taper[row],

@@ -145,20 +145,22 @@ export const reasonLabels = [
   'the body stations do not run aft',
   'the forward CG lies aft of the aft CG',
   'the neutral point is not finite',
+  'the wing is hollower than a triangle: it has no equivalent taper',
 ] as const;
 
 /** Writes the reason's index, or an empty cell where neutral point and margins were worked out. */
 export const reasonStage: Stage = {
   name: 'reasons',
-  reads: ['wake_length', 'body_moment_aft', 'neutral_point', 'cg_forward', 'cg_aft'],
+  reads: ['wake_length', 'body_moment_aft', 'neutral_point', 'cg_forward', 'cg_aft', 'wing_formula_taper'],
   writes: ['not_computed_because'],
   cost: 2,
-  kernel: (count, [wake, body, point, forward, aft], [reason]) => {
+  kernel: (count, [wake, body, point, forward, aft, taper], [reason]) => {
     for (let row = 0; row < count; row++) {
       if (Number.isNaN(wake[row])) reason[row] = 0;
       else if (Number.isNaN(body[row])) reason[row] = 1;
       else if (forward[row] > aft[row]) reason[row] = 2;
-      else reason[row] = Number.isFinite(point[row]) ? Number.NaN : 3;
+      else if (Number.isFinite(point[row])) reason[row] = Number.NaN;
+      else reason[row] = taper[row] === 0 ? 4 : 3;
     }
   },
 };
