@@ -4,6 +4,9 @@ import type { Stage } from './stage.ts';
 
 /** Stands for the flags of formulas used outside their fitted range. */
 const inRange = 'in_range';
+const flagsFigure = 'outside_fitted_range';
+/** Flags are there or not: whichever formulas they name, they weigh as one unit of shortfall. */
+const flagsShortfall = 1;
 
 /** One edge that a combination must keep: value ≥ limit (`sign` 1) or value ≤ limit (`sign` −1). */
 export interface RequirementEdge {
@@ -20,8 +23,7 @@ export interface RequirementEdge {
 /** All edges of a study, in the order of its file, which settles ties. */
 export function requirementEdges({ requirements }: Pick<Study, 'requirements'>): RequirementEdge[] {
   return requirements.flatMap(({ name, figure, atLeast, atMost, scale }): RequirementEdge[] => {
-    if (figure === inRange)
-      return [{ label: name, figure: 'outside_fitted_range', sign: -1, limit: 0, scale }];
+    if (figure === inRange) return [{ label: name, figure: flagsFigure, sign: -1, limit: 0, scale }];
     const ofBand = name === bandRequirements.lower.name || name === bandRequirements.upper.name;
     const label = (edge: string) => (ofBand ? name : `${name}.${edge}`);
     return [
@@ -59,7 +61,8 @@ export function requirementsStage(edges: readonly RequirementEdge[]): Stage {
       for (const column of wholeColumns) column.fill(0, 0, count);
       failsFirst.fill(Number.NaN, 0, count);
       for (let e = 0; e < edges.length; e++) {
-        const { sign, limit, scale } = edges[e];
+        const { figure, sign, limit, scale } = edges[e];
+        const most = figure === flagsFigure ? flagsShortfall : Number.POSITIVE_INFINITY;
         const values = inputs[e];
         const bit = 2 ** e;
         for (let row = 0; row < count; row++) {
@@ -67,8 +70,9 @@ export function requirementsStage(edges: readonly RequirementEdge[]): Stage {
           if (shortfall > edgeTolerance) {
             failsCount[row] += 1;
             fails[row] += bit;
-            if (shortfall / scale > largest[row]) {
-              largest[row] = shortfall / scale;
+            const scaled = Math.min(shortfall, most) / scale;
+            if (scaled > largest[row]) {
+              largest[row] = scaled;
               failsFirst[row] = e;
             }
           } else if (Number.isNaN(shortfall)) {

@@ -254,7 +254,7 @@ describe('formulas outside their fitted range', () => {
     expect(judge(testStudy({ vary, require: band })).map(({ feasible }) => feasible)).toEqual([1, 1]);
     const strict = judge(testStudy({ vary, require: `${band}\nin_range: true` }));
     expect(strict.map(({ feasible }) => feasible)).toEqual([0, 1]);
-    expect(strict[0]).toMatchObject({ fails: 4, fails_first: 2 });
+    expect(strict[0]).toMatchObject({ fails: 4, fails_first: 2, largest_shortfall: 1 });
     const lax = judge(testStudy({ vary, require: `${band}\nin_range: false` }));
     expect(lax.map(({ feasible }) => feasible)).toEqual([1, 1]);
   });
