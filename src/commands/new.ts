@@ -1,4 +1,4 @@
-import { existsSync } from 'node:fs';
+import { existsSync, statSync } from 'node:fs';
 import { dirname } from 'node:path';
 import { UsageError } from '../errors.ts';
 import { writeFileAtomically } from '../results/atomic-file.ts';
@@ -23,9 +23,18 @@ export async function newStudy({ kind, to }: NewArguments): Promise<void> {
       `${to} is already there.`,
       'Give another name; nothing is overwritten.',
     );
-  if (!existsSync(dirname(to))) {
+  if (isMissing(dirname(to))) {
     throw new UsageError('NO_SUCH_FILE', `There is no folder ${dirname(to)}.`, 'Make it, or name another.');
   }
   writeFileAtomically(to, text);
   process.stderr.write(`${to} is written. aftlimit check ${to} tells what it would do.\n`);
+}
+
+/** False for a folder that may not be looked at, too: writing tells what is wrong with that. */
+function isMissing(folder: string): boolean {
+  try {
+    return statSync(folder, { throwIfNoEntry: false }) === undefined;
+  } catch {
+    return false;
+  }
 }
