@@ -107,3 +107,29 @@ export function sweepTangentAt(
 ): number {
   return tangentFrom - ((4 / aspectRatio) * (to - from) * (1 - taper)) / (1 + taper);
 }
+
+/**
+ * Part of the area of a straight-tapered wing that lies between two spanwise stations, both halves
+ * together [-]: (o − i)(2 − (1−λ)(i + o))/(1 + λ).
+ * @param from  inner station over the semi-span, 0…1 [-]
+ * @param to    outer station over the semi-span, from…1 [-]
+ * @param taper tip chord / root chord λ, ≥ 0 [-]
+ * Exact. Stations outside 0…1 carry the straight edges on; nothing is clamped.
+ */
+export function areaFractionBetween(from: number, to: number, taper: number): number {
+  return ((to - from) * (2 - (1 - taper) * (from + to))) / (1 + taper);
+}
+
+/**
+ * Part of ∫ c² dy of a straight-tapered wing between two spanwise stations [-]: the weight with which a
+ * section moment there counts in the wing's, referred to S and MAC.
+ * @param from  inner station over the semi-span, 0…1 [-]
+ * @param to    outer station over the semi-span, from…1 [-]
+ * @param taper tip chord / root chord λ, ≥ 0 [-]
+ * Exact: c² integrated from station to station over the same from 0 to 1, (1+λ+λ²)/3 of the root's.
+ */
+export function momentFractionBetween(from: number, to: number, taper: number): number {
+  const inner = 1 - (1 - taper) * from;
+  const outer = 1 - (1 - taper) * to;
+  return ((to - from) * (inner * inner + inner * outer + outer * outer)) / (1 + taper + taper * taper);
+}
