@@ -1,18 +1,30 @@
-import { hatchTicks } from './geometry/hatch.ts';
-import { type LineLabel, placeOnLines } from './geometry/line-labels.ts';
-import { cutOut, type Point, type Spot, spotsAlong } from './geometry/polyline.ts';
+import { clipToFrame } from './geometry/clip.ts';
+import { type Spot, spotsAlong } from './geometry/polyline.ts';
 import { type KeyItem, keyRow } from './key-row.ts';
-import { bars, type Layer, labels, points, polylines, segments } from './marks.ts';
+import {
+  cgAcross,
+  cgSide,
+  type LimitLine,
+  limitKey,
+  limitLayers,
+  limitStyle,
+  nameLabels,
+  placeLimitNames,
+} from './limit-lines.ts';
+import { bars, type Layer, points, segments } from './marks.ts';
 import { type PixelMap, panel, pixelMap, type Scale } from './panel.ts';
 import { type ChartHeading, type ChartSpec, sheet } from './sheet.ts';
-import { cleanText, ellipsize, numberText, textWidth } from './text-width.ts';
-import { colours, textSize } from './theme.ts';
+import { cleanText, numberText } from './text-width.ts';
+import { colours } from './theme.ts';
 
 /** A limit of the CG against tail size: CG positions on one side of the line are forbidden. */
 export interface CgLimit {
   /** `aft: neutral point − 5 %`, `too stable: neutral point − 20 %` */
   readonly label: string;
-  /** CG at the limit [% MAC] for each size; NaN: no limit there. */
+  /**
+   * CG at the limit [% MAC] for each size. NaN: not known, so nothing fits there. Where it does not
+   * bind: −Infinity if `forbidden` is forward, Infinity if it is aft.
+   */
   readonly cg: ArrayLike<number>;
   /** Which CG positions are forbidden: those ahead of the line, or those behind it. */
   readonly forbidden: 'forward' | 'aft';
@@ -35,10 +47,9 @@ export interface TailSizingData {
 }
 
 const plot = { width: 620, height: 420 } as const;
-const tick = { spacing: 9, length: 8 } as const;
-const lineWidths = { first: 2, other: 1.6 } as const;
-const dashes: readonly (readonly number[] | undefined)[] = [undefined, [8, 3], [3, 3], [9, 3, 2, 3]];
 const loadingThickness = 9;
+/** How many of the limits come first as lines of the margin. */
+const marginLines = 2;
 
 /**
  * Tail-sizing chart: CG across with forward at the left, tail size upward, limits hatched on their
@@ -52,27 +63,20 @@ export function tailSizing(data: TailSizingData): ChartSpec {
     ...(fit === null ? [] : rangeSpots(data, fit, map)),
     ...(data.baseline === undefined ? [] : rangeSpots(data, data.baseline, map)),
   ];
-  const lines = data.limits.map((limit) => limitLine(limit, data.sizes, map));
-  const placed = placeLimitLabels(data.limits, lines, clear);
-  const spots = placed.flatMap((label) => label?.spots ?? []);
+  const limits = data.limits.map((limit, index) => limitLine(limit, index, data.sizes, map));
+  const names = placeLimitNames(limits, clear, plot);
+  const texts = names.flatMap((name) => name?.spots ?? []);
   const layers = [
-    ...lines.flatMap((line, index) => limitLayers(line, data.limits[index]!, index, spots, map)),
-    labels(
-      placed.flatMap((label) =>
-        label === null ? [] : [{ ...map.fromPixels(label), text: label.text, angle: label.angle }],
-      ),
-      {},
-    ),
+    ...limits.flatMap((limit) => limitLayers(limit, texts, plot, map)),
+    nameLabels(names, map),
     ...(data.baseline === undefined ? [] : baselineLayers(data, data.baseline)),
     ...(fit === null ? [] : fitLayers(data, fit, map)),
   ];
-  const unplaced = data.limits.flatMap((limit, index) =>
-    placed[index] === null ? [limitKey(limit, index)] : [],
-  );
+  const unnamed = limits.flatMap((limit, index) => (names[index] === null ? [limitKey(limit)] : []));
   return sheet(
     data.heading,
     plot.width + 50,
-    [panel({ ...plot, ...scales, layers }), keyRow([...keyItems(data, fit), ...unplaced], plot.width)],
+    [panel({ ...plot, ...scales, layers }), keyRow([...keyItems(data, fit), ...unnamed], plot.width)],
     [fitInWords(data, fit)],
   );
 }
@@ -93,7 +97,7 @@ function fitInWords(data: TailSizingData, fit: number | null): string {
 /**
  * The smallest tail at which the whole loading range is allowed by every limit, in the unit of the
  * sizes; null when there is none. Limits are straight between the sizes given; a limit that is NaN
- * at either end of a stretch forbids that stretch.
+ * at either end of a stretch forbids that stretch, an infinite one changes at the stretch's safe end.
  */
 export function smallestFittingTail({
   sizes,
@@ -106,25 +110,29 @@ export function smallestFittingTail({
       const slackAt = (k: number) => (forbidden === 'aft' ? cg[k]! - loading.aft : loading.forward - cg[k]!);
       const [a, b] = [slackAt(i), slackAt(i + 1)];
       if (Number.isNaN(a) || Number.isNaN(b) || (a < 0 && b < 0)) from = 2;
-      else if (a < 0) from = Math.max(from, a / (a - b));
-      else if (b < 0) to = Math.min(to, a / (a - b));
+      else if (a < 0) from = Math.max(from, Number.isFinite(a - b) ? a / (a - b) : 1);
+      else if (b < 0) to = Math.min(to, Number.isFinite(a - b) ? a / (a - b) : 0);
     }
     if (from <= to) return sizes[i]! + from * (sizes[i + 1]! - sizes[i]!);
   }
   return null;
 }
 
+/** Limits beyond the two margin lines widen the plot by at most this part of the rest. */
+const mostWidening = 0.4;
+
 function cgScale({ limits, loading }: TailSizingData): Scale {
-  const all = [loading.forward, loading.aft, ...limits.flatMap(({ cg }) => Array.from(cg))].filter(
+  const finite = (of: readonly CgLimit[]) => of.flatMap(({ cg }) => Array.from(cg)).filter(Number.isFinite);
+  const core = [loading.forward, loading.aft, ...finite(limits.slice(0, marginLines))].filter(
     Number.isFinite,
   );
-  const [least, greatest] = [Math.min(...all), Math.max(...all)];
-  const room = Math.max(2, (greatest - least) * 0.06);
-  return {
-    from: least - room,
-    to: greatest + room,
-    axis: { title: '← forward · CG [% MAC] · aft →', more: { tickCount: 9 } },
-  };
+  const [least, greatest] = [Math.min(...core), Math.max(...core)];
+  const further = finite(limits.slice(marginLines));
+  const widening = (greatest - least) * mostWidening;
+  const from = Math.max(least - widening, Math.min(least, ...further));
+  const to = Math.min(greatest + widening, Math.max(greatest, ...further));
+  const room = Math.max(2, (to - from) * 0.06);
+  return { from: from - room, to: to + room, axis: { title: cgAcross, more: { tickCount: 9 } } };
 }
 
 function sizeScale({ sizes, sizeTitle, baseline }: TailSizingData): Scale {
@@ -136,38 +144,14 @@ function sizeScale({ sizes, sizeTitle, baseline }: TailSizingData): Scale {
   };
 }
 
-function limitLine({ cg }: CgLimit, sizes: readonly number[], map: PixelMap): Point[] {
-  return sizes.flatMap((size, index) =>
-    Number.isNaN(cg[index]!) ? [] : [map.toPixels({ x: cg[index]!, y: size })],
-  );
-}
-
-const longestLabel = 260;
-function placeLimitLabels(
-  limits: readonly CgLimit[],
-  lines: readonly Point[][],
-  clear: readonly Spot[],
-): (LineLabel | null)[] {
-  const placed: (LineLabel | null)[] = [];
-  limits.forEach(({ label }, index) => {
-    const text = ellipsize(label, longestLabel, textSize.label);
-    const others = lines.filter((_, other) => other !== index).flatMap(lineSpots);
-    const taken = placed.flatMap((each) => each?.spots ?? []);
-    const request = {
-      text,
-      width: textWidth(text, textSize.label) + 4,
-      height: textSize.label + 2,
-      lines: [lines[index]!],
-      best: 0.7,
-    };
-    placed.push(placeOnLines([request], [...clear, ...others, ...taken], plot)[0] ?? null);
-  });
-  return placed;
-}
-
-/** Room that a line and its hatch take. */
-function lineSpots(line: readonly Point[]): Spot[] {
-  return spotsAlong(line, tick.length, tick.length);
+function limitLine(
+  { label, cg, forbidden }: CgLimit,
+  index: number,
+  sizes: readonly number[],
+  map: PixelMap,
+): LimitLine {
+  const line = sizes.map((size, k) => map.toPixels({ x: cg[k]!, y: size }));
+  return { label, lines: clipToFrame(line, plot), style: limitStyle(index), side: cgSide(forbidden) };
 }
 
 const rangeRoom = 20;
@@ -176,46 +160,6 @@ function rangeSpots({ loading }: TailSizingData, size: number, map: PixelMap): S
   const from = map.toPixels({ x: loading.forward, y: size });
   const to = map.toPixels({ x: loading.aft, y: size });
   return spotsAlong([from, to], rangeRoom, rangeRoom);
-}
-
-function styleOf(index: number) {
-  const dash = dashes[index % dashes.length];
-  return {
-    color: colours.ink,
-    width: index === 0 ? lineWidths.first : lineWidths.other,
-    ...(dash === undefined ? {} : { dash }),
-  };
-}
-
-function limitLayers(
-  line: readonly Point[],
-  limit: CgLimit,
-  index: number,
-  spots: readonly Spot[],
-  map: PixelMap,
-): Layer[] {
-  const ticks = hatchTicks(line, tick.spacing, tick.length, (_, normal) =>
-    normal.x > 0 === (limit.forbidden === 'aft') ? 1 : -1,
-  );
-  const inPlot = ({ x, y }: Point) => x >= 0 && y >= 0 && x <= plot.width && y <= plot.height;
-  const free = ticks
-    .filter(({ to }) => inPlot(to))
-    .filter(({ from, to }) =>
-      [from, to].every((end) =>
-        spots.every((spot) => Math.hypot(end.x - spot.x, end.y - spot.y) > spot.radius),
-      ),
-    );
-  const rows = free.map(({ from, to }) => {
-    const [a, b] = [map.fromPixels(from), map.fromPixels(to)];
-    return { x: a.x, y: a.y, x2: b.x, y2: b.y };
-  });
-  return [
-    polylines(
-      cutOut(line, spots).map((part) => part.map(map.fromPixels)),
-      styleOf(index),
-    ),
-    segments(rows, { color: colours.ink, width: 1 }),
-  ];
 }
 
 const baselinePoint = { shape: 'square', size: 80, fill: colours.ink } as const;
@@ -236,10 +180,6 @@ function fitLayers(data: TailSizingData, fit: number, map: PixelMap): Layer[] {
     map.fromPixels({ x: 0, y: 0 }).y - map.fromPixels({ x: 0, y: loadingThickness / 2 }).y,
   );
   return [bars([{ x: forward, x2: aft, y: fit - half, y2: fit + half }], { fill: colours.accent })];
-}
-
-function limitKey({ label }: CgLimit, index: number): KeyItem {
-  return { symbol: { kind: 'line', style: styleOf(index), ticks: true }, text: label };
 }
 
 function keyItems(data: TailSizingData, fit: number | null): KeyItem[] {
