@@ -10,9 +10,12 @@ export interface DisplayUnit {
 
 const degrees = 180 / Math.PI;
 const foot = 0.3048;
+const inch = foot / 12;
 const pound = 0.45359237;
 const knot = 1852 / 3600;
 const poundForce = pound * 9.80665;
+/** 550 foot-pounds a second. */
+const horsepower = 550 * foot * poundForce;
 
 /** Exact by definition: foot and pound by the international agreement of 1959, knot by the nautical mile of 1852 m. */
 const shown: Record<Dimension, { metric: DisplayUnit; US: DisplayUnit }> = {
@@ -22,6 +25,13 @@ const shown: Record<Dimension, { metric: DisplayUnit; US: DisplayUnit }> = {
   mass: { metric: unit('kg', 1, 1), US: unit('lb', 1 / pound, 1) },
   speed: { metric: unit('km/h', 3.6, 1), US: unit('kt', 1 / knot, 1) },
   force: { metric: unit('N', 1, 1), US: unit('lbf', 1 / poundForce, 1) },
+  power: { metric: unit('kW', 1 / 1000, 1), US: unit('hp', 1 / horsepower, 1) },
+  moment: { metric: unit('N·m', 1, 1), US: unit('lbf·ft', 1 / (poundForce * foot), 1) },
+  per_length: { metric: unit('°/cm', degrees / 100, 2), US: unit('°/in', degrees * inch, 2) },
+  force_per_speed: {
+    metric: unit('N/(km/h)', 1 / 3.6, 2),
+    US: unit('lbf/kt', knot / poundForce, 3),
+  },
   angle: both('°', degrees, 2),
   per_angle: both('/rad', 1, 3),
   ratio: both('', 1, 4),
@@ -57,6 +67,10 @@ const columnUnits: Record<Dimension, { suffix: string; unit: string; factor: num
   mass: { suffix: '_kg', unit: 'kg', factor: 1 },
   speed: { suffix: '_m_per_s', unit: 'm/s', factor: 1 },
   force: { suffix: '_N', unit: 'N', factor: 1 },
+  power: { suffix: '_W', unit: 'W', factor: 1 },
+  moment: { suffix: '_N_m', unit: 'N*m', factor: 1 },
+  per_length: { suffix: '_rad_per_m', unit: 'rad/m', factor: 1 },
+  force_per_speed: { suffix: '_N_s_per_m', unit: 'N*s/m', factor: 1 },
   angle: { suffix: '_deg', unit: 'deg', factor: degrees },
   per_angle: { suffix: '_per_rad', unit: '1/rad', factor: 1 },
   ratio: { suffix: '', unit: '', factor: 1 },

@@ -10,6 +10,10 @@ export type Dimension =
   | 'per_angle'
   | 'volume'
   | 'force'
+  | 'power'
+  | 'moment'
+  | 'per_length'
+  | 'force_per_speed'
   | 'ratio'
   | 'fraction_of_mac'
   | 'count';

@@ -3,12 +3,16 @@
  * outside which it is refused before a run, and the value taken when a study leaves it out.
  * Values are SI and radians. `[n]` in a path stands for a list entry, counted from 1.
  */
+import { conditionRows } from './condition-inputs.ts';
+import { controlRows, landingGearRows } from './control-inputs.ts';
 import { datum, type InputDefinition, type Row, zero } from './input-row.ts';
+import { loadingRows } from './loading-inputs.ts';
+import { propellerRows } from './power-inputs.ts';
 import type { CgKind } from './study.ts';
 import { tailRows } from './tail-inputs.ts';
 import { wingRows } from './wing-inputs.ts';
 
-export type { InputDefault, InputDefinition } from './input-row.ts';
+export { type InputDefault, type InputDefinition, shareOfSectionMaximumLift } from './input-row.ts';
 
 const bodyRows: Row[] = [
   ['body.stations[n].at', 'x_[n]', 'length', 'Where body station [n] lies, aft positive.', -100, 160, datum],
@@ -53,24 +57,6 @@ const otherRows: Row[] = [
     20,
     datum,
     zero('not given: the vertical position is left out of the neutral point'),
-  ],
-  [
-    'conditions[n].speed',
-    'V_c',
-    'speed',
-    'Calibrated airspeed of condition [n].',
-    1,
-    250,
-    'from a hand-launched model to where formulas for low subsonic speed end',
-  ],
-  [
-    'conditions[n].height',
-    'H',
-    'length',
-    'Pressure height of condition [n] above sea level.',
-    -500,
-    20_000,
-    'the standard atmosphere is used up to 20 km',
   ],
 ];
 
@@ -123,6 +109,11 @@ export const inputDefinitions: readonly InputDefinition[] = [
   cgRow('forward', 'percent_mac'),
   cgRow('aft', 'percent_mac'),
   ...otherRows.slice(1),
+  ...propellerRows,
+  ...controlRows,
+  ...landingGearRows,
+  ...loadingRows,
+  ...conditionRows,
 ].map(definition);
 
 const byPattern = new Map(inputDefinitions.map((entry) => [entry.path, entry]));

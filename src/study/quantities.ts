@@ -39,6 +39,10 @@ export const unitExamples: Record<Dimension, readonly string[]> = {
   angle: ['deg', 'rad'],
   per_angle: ['/rad', '/deg'],
   force: ['N', 'lbf'],
+  power: ['kW', 'W', 'hp'],
+  moment: ['N*m', 'lbf*ft'],
+  per_length: ['rad/m', 'deg/cm', 'deg/in'],
+  force_per_speed: ['N/kt', 'lbf/kt'],
   ratio: ['%'],
   fraction_of_mac: ['%'],
   count: [],
@@ -53,6 +57,10 @@ const kindWords: Record<UnitKind, string> = {
   angle: 'an angle',
   per_angle: 'a value per angle',
   force: 'a force',
+  power: 'a power',
+  moment: 'a moment',
+  per_length: 'an angle per length',
+  force_per_speed: 'a force per speed',
   other: 'something else',
 };
 

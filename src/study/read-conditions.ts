@@ -19,7 +19,13 @@ export function readConditions(root: SourceNode, reading: Reading): Condition[] 
     if (names.includes(name) || name === allConditions) tellName(name, valueIn(item, 'name')!.span, reading);
     names.push(name);
   });
-  return names.map((name) => ({ name }));
+  return names.map((name) => ({
+    name,
+    speedAs: 'speed',
+    power: 'idle',
+    flapsDown: false,
+    groundEffect: false,
+  }));
 }
 
 function tellCount(items: readonly SourceNode[], span: Span, reading: Reading): void {

@@ -67,6 +67,7 @@ function readTree(
     inputs: reading.inputs,
     ...choices,
     ...(body && { body }),
+    hinge: choices.tail.allMoving ? 'none' : 'theory',
     conditions,
     methods,
     axes: axes.map(withoutPlaces),

@@ -66,7 +66,101 @@ export interface CgChoices {
 }
 
 export interface Condition {
+  /** Letters, digits, `_` and `-`; unique even without regard to case and to `-` against `_`. */
   readonly name: string;
+  /** Which of the three the condition gives: the input `conditions[n].speed` and so on. */
+  readonly speedAs: 'speed' | 'lift_coefficient' | 'times_stall';
+  /** `fraction`: input `conditions[n].power`, of the propeller's rated power. `idle`: no such input. */
+  readonly power: 'idle' | 'fraction';
+  /**
+   * True when the deflection (input `conditions[n].flaps`) is other than 0 somewhere in the study.
+   * False: flaps up, whether or not the input is there.
+   */
+  readonly flapsDown: boolean;
+  /** True when the condition gives the height of its wing over the ground (`conditions[n].wing_above_ground`). */
+  readonly groundEffect: boolean;
+}
+
+/**
+ * `section`: inputs `wing.flaps.chord_fraction`, `.span_from`, `.span_to` (of the semi-span).
+ * `increments`: inputs `wing.flaps.at`, `.zero_lift_angle`, `.moment`, `.maximum_lift`, `.downwash`;
+ * increments of the whole wing at the deflection `at`, linear in deflection.
+ */
+export type FlapChoices =
+  | { readonly as: 'section'; readonly kind: 'plain' | 'slotted' }
+  | { readonly as: 'increments' };
+
+/** Inputs `propeller.diameter`, `.blades`, `.blade_chord`, `.blade_angle`, `.station` …, all present. */
+export interface PropellerChoices {
+  readonly place: 'tractor' | 'pusher';
+}
+
+/**
+ * `given`: inputs `tail.elevator.hinge.alpha` and `.delta`; on an all-moving tail `.delta` may be absent
+ * and is then the same as `.alpha`. `theory`: inputs `tail.elevator.hinge.alpha_factor` and
+ * `.delta_factor` on thin-aerofoil theory. `none`: an all-moving tail without data, so no figures with
+ * a free stick.
+ */
+export type HingeKind = 'given' | 'theory' | 'none';
+
+/** Inputs `control.gearing`, `.spring`, `.bobweight`, all present. */
+export interface ControlChoices {
+  readonly kind: 'stick' | 'wheel';
+}
+
+/**
+ * `nose_wheel`: inputs `landing_gear.main_wheels`, `.rotation_speed`, `.ground_angle` and
+ * `.below_datum`, all present. `tail_wheel`: `landing_gear.main_wheels` where given.
+ */
+export interface LandingGearChoices {
+  readonly kind: 'nose_wheel' | 'tail_wheel';
+}
+
+/** Item n of `loading.items`, from 1 in the order of the file: input `loading.items[n].mass`. */
+export interface LoadingItem {
+  readonly name: string;
+  /** `station`: input `.station`; otherwise input `.at`, a fraction of MAC, tail MAC or body length. */
+  readonly carriedBy: 'station' | 'wing' | 'tail' | 'body';
+  /** Used up in flight. */
+  readonly burns: boolean;
+  /** Named in no case and so part of the empty aeroplane: aboard in all cases. */
+  readonly always: boolean;
+}
+
+export interface LoadingCase {
+  readonly name: string;
+  /**
+   * Numbers of the items aboard, from 1: first those always aboard, then the case's own in its order,
+   * in which those that burn are used up.
+   */
+  readonly items: readonly number[];
+}
+
+/**
+ * Masses instead of a stated CG range. Then there are no inputs `cg.forward` and `cg.aft`, both kinds
+ * are `station`; `mass` is an input only where given, else the mass is that of the heaviest case.
+ */
+export interface LoadingChoices {
+  /** Inputs `loading.empty.mass` and `.station`; heights (`.height`) are inputs where given. */
+  readonly empty: boolean;
+  readonly items: readonly LoadingItem[];
+  readonly cases: readonly LoadingCase[];
+}
+
+/** In each combination the input `path` is chosen between the ends so that the figure takes the value; SI. */
+export interface Sizing {
+  readonly path: string;
+  readonly figure: string;
+  readonly value: number;
+  readonly from: number;
+  readonly to: number;
+}
+
+/** Measured corrections. */
+export interface Corrections {
+  /** Added to the neutral point of every condition; fraction of the MAC. */
+  readonly neutralPoint: number;
+  readonly source: string;
 }
 
 /** One varied axis: one or several numbers that step side by side. */
@@ -111,6 +205,10 @@ export interface Preference {
 export interface Band {
   readonly lower?: number;
   readonly upper?: number;
+  /** Names of the conditions in which the lower edge counts; there when the edge is. All when left out. */
+  readonly lowerIn?: readonly string[];
+  /** Likewise of the upper edge; the first condition when left out. */
+  readonly upperIn?: readonly string[];
 }
 
 /** What the program took for a number that the study left out, and why that value. */
@@ -135,14 +233,31 @@ export interface Study {
   readonly show: ShowSystem;
   readonly aircraftClass?: AircraftClass;
 
-  /** Every number of the aeroplane and its conditions, given or assumed, SI, by path. */
+  /**
+   * Every number of the aeroplane and its conditions, given or assumed, SI, by path. Not there when
+   * left out, because they follow from others that may vary: `wing.maximum_lift` and
+   * `tail.maximum_lift` (`shareOfSectionMaximumLift`), `tail.elevator.area` and `.chord` (from
+   * `tail.elevator.chord_fraction` and the tail's planform).
+   */
   readonly inputs: ReadonlyMap<string, number>;
   readonly wing: WingChoices;
   readonly tail: TailChoices;
   /** Undefined when the study says `body: none`. */
   readonly body?: BodyChoices;
   readonly cg: CgChoices;
+  /** Undefined when the wing has no flaps, or the study says nothing of them. */
+  readonly flaps?: FlapChoices;
+  /** Undefined when the study says `propeller: none` or nothing. */
+  readonly propeller?: PropellerChoices;
+  readonly hinge: HingeKind;
+  /** Undefined: no figures of stick force. */
+  readonly control?: ControlChoices;
+  readonly landingGear?: LandingGearChoices;
+  readonly loading?: LoadingChoices;
+  /** One to twelve. */
   readonly conditions: readonly Condition[];
+  readonly size?: Sizing;
+  readonly corrections?: Corrections;
   readonly methods: Methods;
 
   readonly axes: readonly Axis[];

@@ -13,6 +13,10 @@ export type UnitKind =
   | 'angle'
   | 'per_angle'
   | 'force'
+  | 'power'
+  | 'moment'
+  | 'per_length'
+  | 'force_per_speed'
   | 'other';
 
 export interface UnitMeaning {
@@ -27,6 +31,9 @@ const math = create({ unitDependencies, createUnitDependencies });
 const knot = math.unit(1852 / 3600, 'm/s');
 math.createUnit({ kt: { definition: knot, aliases: ['kts', 'kn', 'knot', 'knots'] } }, { override: true });
 math.createUnit({ mph: { definition: math.unit(1609.344 / 3600, 'm/s') } }, { override: true });
+/** The mechanical horsepower, 550 foot-pounds a second: 745.699872 W. */
+const horsepower = math.unit(550 * 0.3048 * 0.45359237 * 9.80665, 'W');
+math.createUnit({ hp: { definition: horsepower } }, { override: true });
 
 const si: readonly (readonly [Exclude<UnitKind, 'other'>, string])[] = [
   ['length', 'm'],
@@ -37,6 +44,10 @@ const si: readonly (readonly [Exclude<UnitKind, 'other'>, string])[] = [
   ['angle', 'rad'],
   ['per_angle', 'rad^-1'],
   ['force', 'N'],
+  ['power', 'W'],
+  ['moment', 'N*m'],
+  ['per_length', 'rad/m'],
+  ['force_per_speed', 'N*s/m'],
 ];
 const references = si.map(([kind, text]) => [kind, text, math.unit(1, text)] as const);
 

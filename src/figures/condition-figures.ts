@@ -1,0 +1,48 @@
+import type { Condition } from '../study/study.ts';
+
+/**
+ * Figures that each flight condition has of its own. With several conditions a study has one of each
+ * per condition (`neutral_point_cruise`), and the plain name is that of the condition which governs
+ * the aft margin.
+ */
+const conditionFigures: ReadonlySet<string> = new Set([
+  'mach',
+  'lift_coefficient',
+  'wing_lift_slope',
+  'wing_body_lift_slope',
+  'wing_lift_slope_ratio',
+  'root_angle_of_attack',
+  'wake_height',
+  'downwash_torenbeek',
+  'downwash_handbook',
+  'downwash_gradient',
+  'body_moment_forward',
+  'body_moment_slope',
+  'body_wing_place',
+  'tail_lift_slope',
+  'tail_lift_share',
+  'lift_slope',
+  'neutral_point_wing',
+  'neutral_point_tail',
+  'neutral_point_body',
+  'neutral_point_height',
+  'neutral_point',
+  'neutral_point_station',
+  'static_margin_forward',
+  'static_margin_aft',
+  'outside_fitted_range',
+]);
+
+export function isConditionFigure(name: string): boolean {
+  return conditionFigures.has(name);
+}
+
+/** Names of the figures that every condition has, in no particular order. */
+export function conditionFigureNames(): string[] {
+  return [...conditionFigures];
+}
+
+/** `neutral_point` in the condition `cruise` → `neutral_point_cruise`. */
+export function conditionFigureName(name: string, { name: condition }: Condition): string {
+  return `${name}_${condition.replaceAll(/[^A-Za-z0-9]+/g, '_')}`;
+}

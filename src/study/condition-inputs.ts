@@ -1,0 +1,68 @@
+import { deg, type Row } from './input-row.ts';
+
+/** Numbers of a flight condition. */
+export const conditionRows: Row[] = [
+  [
+    'conditions[n].speed',
+    'V_c',
+    'speed',
+    'Calibrated airspeed of condition [n].',
+    1,
+    250,
+    'from a hand-launched model to where formulas for low subsonic speed end',
+  ],
+  [
+    'conditions[n].lift_coefficient',
+    'C_L',
+    'ratio',
+    'Lift coefficient of condition [n], in place of its speed.',
+    0.01,
+    4,
+    'without lift there is no speed; 4 is beyond slotted flaps on a whole wing',
+  ],
+  [
+    'conditions[n].times_stall',
+    'V/V_s',
+    'ratio',
+    'Speed of condition [n] over the stall speed with its flaps, in place of its speed.',
+    1,
+    10,
+    'below the stall there is no steady flight; 10 is faster than any light aeroplane',
+  ],
+  [
+    'conditions[n].height',
+    'H',
+    'length',
+    'Pressure height of condition [n] above sea level.',
+    -500,
+    20_000,
+    'the standard atmosphere is used up to 20 km',
+  ],
+  [
+    'conditions[n].power',
+    'P/P_0',
+    'ratio',
+    'Power of condition [n], fraction of the propeller’s rated power.',
+    0,
+    1,
+    'at most the rated power; a windmilling propeller is idle, said as a word',
+  ],
+  [
+    'conditions[n].flaps',
+    'δ_f',
+    'angle',
+    'Flap deflection of condition [n], trailing edge down positive.',
+    -20 * deg,
+    60 * deg,
+    'from a sailplane’s highest speed setting to where more deflection adds drag only',
+  ],
+  [
+    'conditions[n].wing_above_ground',
+    'h_g',
+    'length',
+    'Root quarter-chord of the wing above the ground in condition [n].',
+    0.01,
+    100,
+    'beyond a span the ground is not felt',
+  ],
+];
