@@ -33,8 +33,11 @@ const conditionFigures: ReadonlySet<string> = new Set([
   'outside_fitted_range',
 ]);
 
+/** Bits of the single range checks, which the flags are gathered from. */
+const rangeBit = /^range_bit_/;
+
 export function isConditionFigure(name: string): boolean {
-  return conditionFigures.has(name);
+  return conditionFigures.has(name) || rangeBit.test(name);
 }
 
 /** Names of the figures that every condition has, in no particular order. */

@@ -26,23 +26,34 @@ export const wakeLengthStage: Stage = {
   },
 };
 
-/** Body width at the wing, upwash and downwash integrals, and the body's moment slope. */
-export function bodyStages(study: Pick<Study, 'body' | 'methods'>, places: BaselinePlaces): Stage[] {
-  if (study.body === undefined) return [noBodyStage];
-  const stations = new BodyReader(study.body);
-  const moment = study.methods.body_moment === 'multhopp' ? multhoppStage : quickStage(stations, places);
-  return [widthStage(stations, places), forwardStage(stations, places), aftStage(stations, places), moment];
+type BodyStudy = Pick<Study, 'body' | 'methods'>;
+
+/** What of the body does not depend on the condition: its width at the wing, and the part in the downwash. */
+export function bodyShapeStages({ body }: BodyStudy, places: BaselinePlaces): Stage[] {
+  if (body === undefined) return [nilStage('no body', ['body_width_at_wing', 'body_moment_aft'])];
+  const stations = new BodyReader(body);
+  return [widthStage(stations, places), aftStage(stations, places)];
 }
 
-const noBodyStage: Stage = {
-  name: 'no body',
-  reads: [],
-  writes: ['body_width_at_wing', 'body_moment_forward', 'body_moment_aft', 'body_moment_slope'],
-  cost: 1,
-  kernel: (count, _, outputs) => {
-    for (const output of outputs) output.fill(0, 0, count);
-  },
-};
+/** The body's moment slope in one condition. */
+export function bodyMomentStages({ body, methods }: BodyStudy, places: BaselinePlaces): Stage[] {
+  if (body === undefined) return [nilStage('no body moment', ['body_moment_forward', 'body_moment_slope'])];
+  const stations = new BodyReader(body);
+  const moment = methods.body_moment === 'multhopp' ? multhoppStage : quickStage(stations, places);
+  return [forwardStage(stations, places), moment];
+}
+
+function nilStage(name: string, writes: readonly string[]): Stage {
+  return {
+    name,
+    reads: [],
+    writes,
+    cost: 1,
+    kernel: (count, _, outputs) => {
+      for (const output of outputs) output.fill(0, 0, count);
+    },
+  };
+}
 
 const readsPerStation = 2;
 

@@ -1,9 +1,11 @@
 import { figureOfInput } from '../figures/study-figures.ts';
 import type { Study } from '../study/study.ts';
 import type { BaselinePlaces } from './body.ts';
-import { bodyStages, wakeLengthStage } from './body.ts';
+import { bodyMomentStages, bodyShapeStages, wakeLengthStage } from './body.ts';
 import { liftCoefficientStage, machStage } from './condition.ts';
+import { stagesOfConditions } from './conditions.ts';
 import { angleOfAttackStage, downwashStage, machRatioStage } from './downwash.ts';
+import { governingStages } from './governing.ts';
 import { loadingRangeStages, marginsStage, windowStage } from './loading-range.ts';
 import { heightStage, neutralPointStage, sharesStage } from './neutral-point.ts';
 import { rangeStages, reasonStage } from './out-of-range.ts';
@@ -11,42 +13,58 @@ import { requirementEdges, requirementsStage } from './requirements.ts';
 import { runOnce } from './run-once.ts';
 import { skipStage } from './skip.ts';
 import type { Stage } from './stage.ts';
-import { elevatorStage, tailLiftStage, tailPlaceStage, tailPlanformStage, tailSizeStage } from './tail.ts';
+import {
+  elevatorStage,
+  tailCentreStage,
+  tailLiftStage,
+  tailPlaceStage,
+  tailPlanformStage,
+  tailSizeStage,
+} from './tail.ts';
 import { carryOverStage, centreStationStage, wingCentreStage, wingLiftStage } from './wing-lift.ts';
 import { wingPlanformStage, wingStationsStage } from './wing-planform.ts';
 
 /** Every stage of a study in the order of computation. */
 export function buildStages(study: Study): Stage[] {
   const skip = study.skip.length === 0 ? [] : [skipStage(study.skip, figureOfInput(study))];
-  const [width, ...body] = bodyStages(study, baselinePlaces(study));
+  const places = baselinePlaces(study);
   return [
     ...skip,
     ...placeStages(study),
-    machStage,
-    liftCoefficientStage,
-    wingLiftStage(study),
-    width,
-    carryOverStage,
     wingCentreStage(study),
     centreStationStage,
     wakeLengthStage,
     tailSizeStage(study),
     tailPlanformStage(study),
-    tailLiftStage(study),
+    tailCentreStage(study),
     elevatorStage(study),
+    ...bodyShapeStages(study, places),
+    ...loadingRangeStages(study),
+    ...stagesOfConditions(study, () => conditionStages(study, places)),
+    ...governingStages(study),
+    windowStage(study),
+    reasonStage,
+    requirementsStage(requirementEdges(study)),
+  ];
+}
+
+/** Stages of one flight condition. */
+function conditionStages(study: Study, places: BaselinePlaces): Stage[] {
+  return [
+    machStage,
+    liftCoefficientStage,
+    wingLiftStage(study),
+    carryOverStage,
+    tailLiftStage(study),
     angleOfAttackStage,
     machRatioStage(study),
     downwashStage(study),
-    ...body,
+    ...bodyMomentStages(study, places),
     sharesStage,
     heightStage(study),
     neutralPointStage,
-    ...loadingRangeStages(study),
     marginsStage,
-    windowStage(study),
     ...rangeStages(study),
-    reasonStage,
-    requirementsStage(requirementEdges(study)),
   ];
 }
 

@@ -52,18 +52,35 @@ export const marginsStage: Stage = {
   },
 };
 
+/**
+ * Margins over all conditions: aft that of the least neutral point, forward that of the greatest, each
+ * among the conditions in which its edge of the band counts.
+ */
+export const governingMarginsStage: Stage = {
+  ...marginsStage,
+  name: 'governing margins',
+  reads: ['neutral_point', 'cg_forward', 'cg_aft', 'neutral_point_aftmost'],
+  kernel: (count, [least, forward, aft, greatest], [marginForward, marginAft]) => {
+    for (let row = 0; row < count; row++) {
+      const reversed = forward[row] > aft[row];
+      marginForward[row] = reversed ? Number.NaN : staticMargin(greatest[row], forward[row]);
+      marginAft[row] = reversed ? Number.NaN : staticMargin(least[row], aft[row]);
+    }
+  },
+};
+
 /** The CG window that the band allows; an end is empty where the band has no such edge. */
-export function windowStage({ band }: Pick<Study, 'band'>): Stage {
+export function windowStage({ band, conditions }: Pick<Study, 'band' | 'conditions'>): Stage {
   const { lower = Number.NaN, upper = Number.NaN } = band;
   return {
     name: 'CG window',
-    reads: ['neutral_point'],
+    reads: ['neutral_point', conditions.length === 1 ? 'neutral_point' : 'neutral_point_aftmost'],
     writes: ['cg_window_forward', 'cg_window_aft'],
     cost: 2,
-    kernel: (count, [point], [forward, aft]) => {
+    kernel: (count, [least, greatest], [forward, aft]) => {
       for (let row = 0; row < count; row++) {
-        forward[row] = point[row] - upper;
-        aft[row] = point[row] - lower;
+        forward[row] = greatest[row] - upper;
+        aft[row] = least[row] - lower;
       }
     },
   };

@@ -67,35 +67,53 @@ export function tailPlanformStage({ tail }: TailStudy): Stage {
   };
 }
 
-/** Lift-curve slope and aerodynamic centre of the tail on its own. */
+/** Lift-curve slope of the tail on its own. */
 export function tailLiftStage({ tail, methods }: TailStudy): Stage {
   const slope = liftSlopeBy[methods.lift_slope];
   const sweepFrom = tail.sweep === 'quarter_chord' ? quarterChord : 0;
-  const useTable = methods.aerodynamic_centre === 'table';
   const vTail = tail.layout === 'V';
   const reads = [
     'tail_aspect_ratio',
     'tail_taper',
     `tail_sweep_${tail.sweep}`,
     'tail_section_lift_slope',
-    'tail_section_aerodynamic_centre',
     'mach',
   ];
   return {
     name: 'tail lift slope',
     reads: vTail ? [...reads, 'tail_v_angle'] : reads,
-    writes: ['tail_lift_slope', 'tail_aerodynamic_centre'],
-    cost: 200,
-    kernel: (count, [A, taper, sweep, a0, section, mach, vAngle], [a, centre]) => {
+    writes: ['tail_lift_slope'],
+    cost: 100,
+    kernel: (count, [A, taper, sweep, a0, mach, vAngle], [a]) => {
       for (let row = 0; row < count; row++) {
         const tangent = Math.tan(sweep[row]);
         const quarter = Math.atan(sweepTangentAt(tangent, sweepFrom, quarterChord, A[row], taper[row]));
         const half = Math.atan(sweepTangentAt(tangent, sweepFrom, halfChord, A[row], taper[row]));
         const flat = slope(A[row], taper[row], quarter, half, a0[row], mach[row]);
         a[row] = vTail ? flat * vTailFactor(vAngle[row]) : flat;
-        centre[row] = useTable
-          ? tableAerodynamicCentre(A[row], taper[row], quarter) + section[row] - quarterChord
-          : section[row];
+      }
+    },
+  };
+}
+
+/** Aerodynamic centre of the tail on its own MAC. */
+export function tailCentreStage({ tail, methods }: TailStudy): Stage {
+  const sweepFrom = tail.sweep === 'quarter_chord' ? quarterChord : 0;
+  const useTable = methods.aerodynamic_centre === 'table';
+  return {
+    name: 'tail aerodynamic centre',
+    reads: ['tail_aspect_ratio', 'tail_taper', `tail_sweep_${tail.sweep}`, 'tail_section_aerodynamic_centre'],
+    writes: ['tail_aerodynamic_centre'],
+    cost: 100,
+    kernel: (count, [A, taper, sweep, section], [centre]) => {
+      for (let row = 0; row < count; row++) {
+        if (!useTable) {
+          centre[row] = section[row];
+          continue;
+        }
+        const tangent = Math.tan(sweep[row]);
+        const quarter = Math.atan(sweepTangentAt(tangent, sweepFrom, quarterChord, A[row], taper[row]));
+        centre[row] = tableAerodynamicCentre(A[row], taper[row], quarter) + section[row] - quarterChord;
       }
     },
   };

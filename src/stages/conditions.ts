@@ -1,0 +1,39 @@
+import { conditionFigureName, isConditionFigure } from '../figures/condition-figures.ts';
+import type { Condition, Study } from '../study/study.ts';
+import type { Stage } from './stage.ts';
+
+/** Inputs of the first condition as the stages name them; each condition reads its own. */
+const firstCondition = /^conditions_1_/;
+
+/**
+ * A stage as it stands in one of several conditions: figures that depend on the condition carry its
+ * name, inputs of the first condition become those of this one.
+ * @param number of the condition, from 1
+ */
+export function forCondition(stage: Stage, condition: Condition, number: number): Stage {
+  const rename = (figure: string) => {
+    if (firstCondition.test(figure)) return figure.replace(firstCondition, `conditions_${number}_`);
+    return isConditionFigure(figure) ? conditionFigureName(figure, condition) : figure;
+  };
+  return {
+    ...stage,
+    name: `${stage.name}, ${condition.name}`,
+    reads: stage.reads.map(rename),
+    writes: stage.writes.map((figure) => (figure === null ? null : rename(figure))),
+  };
+}
+
+/**
+ * Stages of all conditions. With one condition its figures carry no name; with several each has its
+ * own, and `governingStages` gives the plain names to the condition that governs.
+ * @param stagesOf the stages of one condition, with the names they have when it is the only one
+ */
+export function stagesOfConditions(
+  { conditions }: Pick<Study, 'conditions'>,
+  stagesOf: (condition: Condition) => readonly Stage[],
+): Stage[] {
+  if (conditions.length === 1) return [...stagesOf(conditions[0])];
+  return conditions.flatMap((condition, index) =>
+    stagesOf(condition).map((stage) => forCondition(stage, condition, index + 1)),
+  );
+}
