@@ -1,5 +1,22 @@
 export { type CarpetAxis, type CarpetPlotData, carpetPlot } from './carpet-plot.ts';
-export { type MacRulerData, type MacRulerRow, macRuler } from './mac-ruler.ts';
+export {
+  type ElevatorToTrimData,
+  elevatorToTrim,
+  type TrimCg,
+  type TrimCurve,
+  type TrimPanel,
+} from './elevator-to-trim.ts';
+export type { FlightTestSlopesData, FlownCg, StraightLine } from './flight-test-data.ts';
+export { flightTestSlopes } from './flight-test-slopes.ts';
+export type { MassPoint } from './geometry/burn-path.ts';
+export {
+  type LoadingCase,
+  type LoadingDiagramData,
+  type LoadingLimit,
+  loadingDiagram,
+} from './loading-diagram.ts';
+export { macRuler } from './mac-ruler.ts';
+export type { MacRulerData, MacRulerRow } from './mac-ruler-data.ts';
 export {
   type AxisMargins,
   type BandEdges,

@@ -1,32 +1,25 @@
 import { spread } from './geometry/spread.ts';
 import { type KeyItem, keyRow } from './key-row.ts';
+import type { MacRulerData, MacRulerRow } from './mac-ruler-data.ts';
+import {
+  conditionKey,
+  conditionLayers,
+  controlLimitKey,
+  controlLimitLayers,
+  controlLimitText,
+  furtherMarks,
+} from './mac-ruler-marks.ts';
 import { bars, type Label, type Layer, labels, mergeAlike, points, type Segment, segments } from './marks.ts';
 import { panel, type Scale } from './panel.ts';
-import { type ChartHeading, type ChartSpec, sheet } from './sheet.ts';
+import { type ChartSpec, sheet } from './sheet.ts';
 import { ellipsize, numberText, textWidth } from './text-width.ts';
 import { colours, textSize, weight } from './theme.ts';
-
-/** One combination's places on its mean aerodynamic chord, all in % MAC. */
-export interface MacRulerRow {
-  /** `#1234` */
-  readonly label: string;
-  /** Its key values in words: `span 9.5 m, tail arm 4.3 m`. */
-  readonly detail: string;
-  readonly cg: { readonly forward: number; readonly aft: number };
-  /** CG positions that the band allows; reversed means that it allows none. An edge that the band leaves open is absent. */
-  readonly window: { readonly from?: number; readonly to?: number };
-  readonly neutralPoint: number;
-  /** Aerodynamic centre of the wing. */
-  readonly aerodynamicCentre: number;
-}
-export interface MacRulerData {
-  readonly heading: ChartHeading;
-  readonly rows: readonly MacRulerRow[];
-}
 
 const width = 620;
 /** Lanes of one row, from its top [px]. */
 const lane = { name: 8, bracket: 29, strip: 38, stripHeight: 12, below: 62, row: 86 } as const;
+/** Room under the strip for the numbers of the conditions [px]. */
+const conditionRoom = 18;
 const quarterMac = 25;
 const neutralPointMark = { shape: 'diamond', size: 110, fill: colours.ink } as const;
 const centreMark = {
@@ -42,15 +35,17 @@ const quarterLine = { color: colours.ink, width: 1 } as const;
 /** A strip of the mean aerodynamic chord for each combination: CG range, CG window, neutral point, aerodynamic centre. */
 export function macRuler(data: MacRulerData): ChartSpec {
   const x = chordScale(data.rows);
-  const height = data.rows.length * lane.row;
-  const layers = mergeAlike(data.rows.flatMap((row, index) => rowLayers(row, index * lane.row, x)));
+  const extra = data.rows.some(({ neutralPoints = [] }) => neutralPoints.length > 0) ? conditionRoom : 0;
+  const rowHeight = lane.row + extra;
+  const height = data.rows.length * rowHeight;
+  const layers = mergeAlike(data.rows.flatMap((row, index) => rowLayers(row, index * rowHeight, extra, x)));
   return sheet(data.heading, width + 30, [
-    keyRow(keyItems(), width),
+    keyRow(keyItems(data), width),
     panel({ width, height, x, y: 'pixels', layers, framed: false }),
   ]);
 }
 
-function keyItems(): KeyItem[] {
+function keyItems(data: MacRulerData): KeyItem[] {
   return [
     { symbol: { kind: 'swatch', fill: colours.accent }, text: 'CG range' },
     {
@@ -64,7 +59,9 @@ function keyItems(): KeyItem[] {
           width: 1.5,
         },
       },
-      text: 'CG window that the band allows',
+      text: data.rows.some(({ controlLimit }) => controlLimit !== undefined)
+        ? 'CG window that band and control allow'
+        : 'CG window that the band allows',
     },
     { symbol: { kind: 'point', point: neutralPointMark }, text: 'neutral point' },
     { symbol: { kind: 'point', point: centreMark }, text: 'wing aerodynamic centre' },
@@ -75,19 +72,29 @@ function keyItems(): KeyItem[] {
       },
       text: 'quarter MAC',
     },
+    ...furtherMarks.flatMap(({ point, text, placeOf }) =>
+      data.rows.some((row) => placeOf(row) !== undefined)
+        ? [{ symbol: { kind: 'point' as const, point }, text }]
+        : [],
+    ),
+    ...controlLimitKey(data),
+    ...conditionKey(data),
   ];
 }
 
 /** 0–100 % MAC, and further in tens where a combination needs it. */
 function chordScale(rows: readonly MacRulerRow[]): Scale {
   const all = rows
-    .flatMap(({ cg, window, neutralPoint, aerodynamicCentre }) => [
-      cg.forward,
-      cg.aft,
-      neutralPoint,
-      aerodynamicCentre,
-      window.from,
-      window.to,
+    .flatMap((row) => [
+      row.cg.forward,
+      row.cg.aft,
+      row.neutralPoint,
+      row.aerodynamicCentre,
+      row.window.from,
+      row.window.to,
+      row.controlLimit?.at,
+      ...(row.neutralPoints ?? []),
+      ...furtherMarks.map(({ placeOf }) => placeOf(row)),
     ])
     .filter((value): value is number => value !== undefined && Number.isFinite(value));
   const from = Math.min(0, Math.floor(Math.min(...all) / 10) * 10);
@@ -95,7 +102,7 @@ function chordScale(rows: readonly MacRulerRow[]): Scale {
   return { from, to, axis: { title: 'Behind the leading edge of the MAC [% MAC]', more: { tickCount: 10 } } };
 }
 
-function rowLayers(row: MacRulerRow, top: number, x: Scale): Layer[] {
+function rowLayers(row: MacRulerRow, top: number, extra: number, x: Scale): Layer[] {
   const strip = { y: top + lane.strip, y2: top + lane.strip + lane.stripHeight };
   const middle = (strip.y + strip.y2) / 2;
   const inset = 2;
@@ -104,10 +111,15 @@ function rowLayers(row: MacRulerRow, top: number, x: Scale): Layer[] {
     segments([{ x: quarterMac, x2: quarterMac, y: strip.y - 1, y2: strip.y2 + 1 }], quarterLine),
     bars(known([{ ...cgBar(row, x), y: strip.y + inset, y2: strip.y2 - inset }]), { fill: colours.accent }),
     points(known([{ x: row.aerodynamicCentre, y: strip.y2 + 2 }]), centreMark),
+    ...furtherMarks.map(({ point, placeOf }) =>
+      points(known([{ x: placeOf(row) ?? Number.NaN, y: middle }]), point),
+    ),
     points(known([{ x: row.neutralPoint, y: middle }]), neutralPointMark),
+    ...conditionLayers(row.neutralPoints ?? [], strip.y2, x, width),
+    ...controlLimitLayers(row, top + lane.bracket, strip.y2, x, width),
     ...windowLayers(row, top, x),
     ...nameLayers(row, top, x),
-    labels(belowLabels(row, top + lane.below, x), { size: textSize.small, baseline: 'top' }),
+    labels(belowLabels(row, top + lane.below + extra, x), { size: textSize.small, baseline: 'top' }),
   ];
 }
 
@@ -137,8 +149,8 @@ function nameLayers({ label, detail }: MacRulerRow, top: number, x: Scale): Laye
 }
 
 /** The window as a bracket over the strip, with its numbers; an open side has no foot. */
-function windowLayers({ window }: MacRulerRow, top: number, x: Scale): Layer[] {
-  const { from, to } = window;
+function windowLayers(row: MacRulerRow, top: number, x: Scale): Layer[] {
+  const { from, to } = row.window;
   const y = top + lane.bracket;
   const foot = top + lane.strip - 2;
   if (from === undefined && to === undefined) return [];
@@ -148,15 +160,17 @@ function windowLayers({ window }: MacRulerRow, top: number, x: Scale): Layer[] {
   const style = { size: textSize.small, color: colours.accentDark };
   if (start > end) {
     const said = `CG window empty: it would run from ${numberText(start, 1)} to ${numberText(end, 1)} %`;
-    return [labels([{ x: x.from, y, text: said }], { ...style, align: 'left' })];
+    const text = ellipsize(said + controlLimitText(row), width, textSize.small);
+    return [labels([{ x: x.from, y, text }], { ...style, align: 'left' })];
   }
   const rows: Segment[] = [{ x: start, x2: end, y, y2: y }];
   if (from !== undefined) rows.push({ x: from, x2: from, y, y2: foot });
   if (to !== undefined) rows.push({ x: to, x2: to, y, y2: foot });
-  const text = `window ${windowText(window)}`;
+  const said = `window ${windowText(row.window)}${controlLimitText(row)}`;
   const perPixel = (x.to - x.from) / width;
-  const roomRight = (x.to - end) / perPixel;
-  const right = roomRight > textWidth(text, textSize.small) + 8;
+  const [roomLeft, roomRight] = [(start - x.from) / perPixel - 8, (x.to - end) / perPixel - 8];
+  const right = roomRight > textWidth(said, textSize.small) || roomRight > roomLeft;
+  const text = ellipsize(said, right ? roomRight : roomLeft, textSize.small);
   return [
     segments(rows, bracketLine),
     labels([{ x: right ? end : start, y, text }], {
@@ -178,11 +192,16 @@ function rangeText(from: number, to: number): string {
 }
 
 /** CG range, neutral point and aerodynamic centre in numbers under their marks, moved apart where they would touch. */
-function belowLabels({ cg, neutralPoint, aerodynamicCentre }: MacRulerRow, y: number, x: Scale): Label[] {
+function belowLabels(row: MacRulerRow, y: number, x: Scale): Label[] {
+  const { cg, neutralPoint, aerodynamicCentre } = row;
   const wanted = [
     { at: aerodynamicCentre, text: `a.c. ${numberText(aerodynamicCentre, 1)} %` },
     { at: (cg.forward + cg.aft) / 2, text: `CG ${rangeText(cg.forward, cg.aft)}` },
     { at: neutralPoint, text: `n.p. ${numberText(neutralPoint, 1)} %` },
+    ...furtherMarks.map(({ short, placeOf }) => {
+      const at = placeOf(row) ?? Number.NaN;
+      return { at, text: `${short} ${numberText(at, 1)} %` };
+    }),
   ].filter(({ at }) => Number.isFinite(at));
   const perPixel = (x.to - x.from) / width;
   const gap = 10 * perPixel;

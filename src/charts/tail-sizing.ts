@@ -1,17 +1,17 @@
 import { clipToFrame } from './geometry/clip.ts';
 import { type Spot, spotsAlong } from './geometry/polyline.ts';
 import { type KeyItem, keyRow } from './key-row.ts';
+import { bars, type Layer, points, segments } from './marks.ts';
 import {
   cgAcross,
   cgSide,
-  type LimitLine,
   limitKey,
-  limitLayers,
   limitStyle,
+  type NamedLine,
+  namedLineLayers,
   nameLabels,
-  placeLimitNames,
-} from './limit-lines.ts';
-import { bars, type Layer, points, segments } from './marks.ts';
+  placeNames,
+} from './named-lines.ts';
 import { type PixelMap, panel, pixelMap, type Scale } from './panel.ts';
 import { type ChartHeading, type ChartSpec, sheet } from './sheet.ts';
 import { cleanText, numberText } from './text-width.ts';
@@ -64,10 +64,10 @@ export function tailSizing(data: TailSizingData): ChartSpec {
     ...(data.baseline === undefined ? [] : rangeSpots(data, data.baseline, map)),
   ];
   const limits = data.limits.map((limit, index) => limitLine(limit, index, data.sizes, map));
-  const names = placeLimitNames(limits, clear, plot);
+  const names = placeNames(limits, clear, plot);
   const texts = names.flatMap((name) => name?.spots ?? []);
   const layers = [
-    ...limits.flatMap((limit) => limitLayers(limit, texts, plot, map)),
+    ...limits.flatMap((limit) => namedLineLayers(limit, texts, plot, map)),
     nameLabels(names, map),
     ...(data.baseline === undefined ? [] : baselineLayers(data, data.baseline)),
     ...(fit === null ? [] : fitLayers(data, fit, map)),
@@ -149,7 +149,7 @@ function limitLine(
   index: number,
   sizes: readonly number[],
   map: PixelMap,
-): LimitLine {
+): NamedLine {
   const line = sizes.map((size, k) => map.toPixels({ x: cg[k]!, y: size }));
   return { label, lines: clipToFrame(line, plot), style: limitStyle(index), side: cgSide(forbidden) };
 }

@@ -8,8 +8,8 @@ import type { PixelMap } from './panel.ts';
 import { ellipsize, textWidth } from './text-width.ts';
 import { colours, textSize } from './theme.ts';
 
-/** A limit in a plot: a line with its name on it, hatched on the side that it forbids. Positions in pixels. */
-export interface LimitLine {
+/** A line of a plot with its name on it; a limit is hatched on the side that it forbids. Positions in pixels. */
+export interface NamedLine {
   readonly label: string;
   readonly lines: readonly Polyline[];
   readonly style: LineStyle;
@@ -53,23 +53,23 @@ export function cgSide(forbidden: 'forward' | 'aft'): (normal: Point) => 1 | -1 
   return (normal) => (normal.x > 0 === (forbidden === 'aft') ? 1 : -1);
 }
 
-/** Room that a limit and its hatch take. */
-export function limitSpots({ lines, side }: LimitLine): Spot[] {
+/** Room that a line and its hatch take. */
+export function lineRoom({ lines, side }: NamedLine): Spot[] {
   const room = side === undefined ? plainRoom : tick.length;
   return lines.flatMap((line) => spotsAlong(line, room, room));
 }
 
 /** Names on their own lines, clear of `clear`, of the other lines and of one another; null where there is no room. */
-export function placeLimitNames(
-  limits: readonly LimitLine[],
+export function placeNames(
+  all: readonly NamedLine[],
   clear: readonly Spot[],
   frame: Frame,
   size: number = textSize.label,
 ): (LineLabel | null)[] {
   const placed: (LineLabel | null)[] = [];
-  limits.forEach(({ label, lines, best = 0.7 }, index) => {
+  all.forEach(({ label, lines, best = 0.7 }, index) => {
     const text = ellipsize(label, longestName, size);
-    const others = limits.flatMap((limit, other) => (other === index ? [] : limitSpots(limit)));
+    const others = all.flatMap((line, other) => (other === index ? [] : lineRoom(line)));
     const taken = placed.flatMap((each) => each?.spots ?? []);
     const request = { text, width: textWidth(text, size) + 4, height: size + 2, lines, best };
     placed.push(placeOnLines([request], [...clear, ...others, ...taken], frame)[0] ?? null);
@@ -86,8 +86,8 @@ export function nameLabels(names: readonly (LineLabel | null)[], map: PixelMap, 
 }
 
 /** The line, open where texts stand, and its hatch. */
-export function limitLayers(
-  { lines, style, side }: LimitLine,
+export function namedLineLayers(
+  { lines, style, side }: NamedLine,
   texts: readonly Spot[],
   frame: Frame,
   map: PixelMap,
@@ -115,7 +115,7 @@ export function limitLayers(
   ];
 }
 
-/** Key of a limit whose name found no room on its line. */
-export function limitKey({ label, style, side }: LimitLine): KeyItem {
+/** Key of a line whose name found no room on it. */
+export function limitKey({ label, style, side }: NamedLine): KeyItem {
   return { symbol: { kind: 'line', style, ticks: side !== undefined }, text: label };
 }
