@@ -1,4 +1,5 @@
 import { figureNames, isWorksheetOnly } from '../figures/catalogue.ts';
+import { conditionFigureName } from '../figures/condition-figures.ts';
 import { tableColumn } from '../figures/display.ts';
 import type { Figure, TableColumn } from '../figures/figure.ts';
 import { figureOfInput, figuresOfStudy } from '../figures/study-figures.ts';
@@ -27,6 +28,7 @@ export function layOut(study: Study): LaidOut {
     requirements: edges.map((edge) => edge.label),
     ranges: rangeLabels,
     reasons: reasonLabels,
+    conditions: study.conditions.map(({ name }) => name),
   });
   const columns = tableFigureNames(study, plan).map((name) => tableColumn(figureNamed(figures, name)));
   return { plan, figures, columns, edges };
@@ -51,11 +53,24 @@ const alwaysKept = [
   'largest_shortfall',
 ];
 
+/** Figures of which the table has a column for each of several conditions; all others are in the worksheet. */
+const tabledPerCondition = ['neutral_point', 'static_margin_forward', 'static_margin_aft'];
+
+function ofConditions({ conditions }: Study): string[] {
+  if (conditions.length === 1) return [];
+  return tabledPerCondition.flatMap((name) =>
+    conditions.map((condition) => conditionFigureName(name, condition)),
+  );
+}
+
 /** The varied numbers in the author's order, then every result in the order of computation. */
 function tableFigureNames(study: Study, plan: Plan): string[] {
   const varied = plan.authorOrder.flatMap((position) => plan.axes[position].figures);
   const results = figureNames.filter((name) => name !== combinationFigure && !isWorksheetOnly(name));
-  const all = [...new Set([combinationFigure, ...varied, ...results])];
+  const workedOut = (name: string) => name === combinationFigure || plan.axesOfFigure.has(name);
+  const all = [...new Set([combinationFigure, ...varied, ...results, ...ofConditions(study)])].filter(
+    workedOut,
+  );
   if (study.columns === undefined) return all;
   const wanted = new Set([
     ...alwaysKept,

@@ -1,6 +1,7 @@
 import type { Study } from '../study/study.ts';
 import type { FigureName } from './catalogue.ts';
 import { catalogueFigure, figureNames } from './catalogue.ts';
+import { conditionFigureName, isConditionFigure } from './condition-figures.ts';
 import type { Figure } from './figure.ts';
 import { inputFigure, inputFigureName } from './input-figures.ts';
 
@@ -50,6 +51,8 @@ export interface StudyLabels {
   readonly requirements: readonly string[];
   readonly ranges: readonly string[];
   readonly reasons: readonly string[];
+  /** Names of the flight conditions, in the file's order. */
+  readonly conditions: readonly string[];
 }
 
 function labelsOf(name: FigureName, labels: StudyLabels): readonly string[] | undefined {
@@ -62,6 +65,9 @@ function labelsOf(name: FigureName, labels: StudyLabels): readonly string[] | un
       return labels.ranges;
     case 'not_computed_because':
       return labels.reasons;
+    case 'governing_condition_aft':
+    case 'governing_condition_forward':
+      return labels.conditions;
     default:
       return undefined;
   }
@@ -81,9 +87,21 @@ export function figuresOfStudy(study: Study, labels: StudyLabels): Map<string, F
   const wording = chosenWording(study);
   for (const name of figureNames) {
     if (figures.has(name)) continue;
-    figures.set(name, { ...catalogueFigure(name, labelsOf(name, labels)), ...wording[name] });
+    const figure = { ...catalogueFigure(name, labelsOf(name, labels)), ...wording[name] };
+    for (const own of figuresOfConditions(figure, study)) figures.set(own.name, own);
+    figures.set(name, figure);
   }
   return figures;
+}
+
+/** With several conditions, a figure as each of them has it. */
+function figuresOfConditions(figure: Figure, { conditions }: Study): Figure[] {
+  if (conditions.length === 1 || !isConditionFigure(figure.name)) return [];
+  return conditions.map((condition) => ({
+    ...figure,
+    name: conditionFigureName(figure.name, condition),
+    meaning: `${figure.meaning.replace(/\.$/, '')}; in ${condition.name}.`,
+  }));
 }
 
 export function figureOfInput(study: Pick<Study, 'cg'>): (path: string) => string {

@@ -30,6 +30,7 @@ const dimensions = new Map<string, Dimension>(
         requirements: [],
         ranges: [],
         reasons: [],
+        conditions: [],
       },
     ),
   ]
