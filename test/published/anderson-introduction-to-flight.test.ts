@@ -1,4 +1,6 @@
 import { describe, expect, it } from 'vitest';
+import { standardDensity } from '../../src/methods/atmosphere.ts';
+import { freeStickFactor, stickFreeStep } from '../../src/methods/free-stick.ts';
 import {
   bodyStep,
   neutralPoint,
@@ -8,6 +10,12 @@ import {
   wholeLiftSlope,
 } from '../../src/methods/neutral-point.ts';
 import { tailVolume } from '../../src/methods/tail.ts';
+import {
+  elevatorLiftSlope,
+  elevatorToTrim,
+  tailLiftAtWingZeroLift,
+  zeroLiftMoment,
+} from '../../src/methods/trim.ts';
 import { shortFormNeutralPoint } from './textbook-forms.ts';
 
 /**
@@ -41,15 +49,45 @@ describe('with the tail', () => {
   it('moment slope −0.0133 /deg', () => expect(Math.abs(slope + 0.0133)).toBeLessThan(0.0001));
   it('moment at zero lift 0.06', () => expect(Math.abs(momentAtZeroLift - 0.06)).toBeLessThan(0.0005));
   it('trims at 4.5°', () => expect(Math.abs(-momentAtZeroLift / slope - 4.5)).toBeLessThan(0.05));
-  it('elevator to trim at lift coefficient 0.52, the book’s roundings: −1.94°', () => {
-    const elevator = (0.06 - 0.0133 * 6.5) / (volume * 0.04);
-    expect(Math.abs(elevator + 1.94)).toBeLessThan(0.01);
+});
+
+describe('elevator to trim', () => {
+  // 0.04 /deg of elevator on the tail's area; the book's lever is the tail volume, from the CG.
+  const elevatorSlope = elevatorLiftSlope(0.1, 1, tail.area / area, 0.4);
+  const place = cg + tail.arm / chord;
+  /** The closed form with the book's quantities: its moment slope, and its lever in place of h_t − h_n. */
+  const byBook = (lift: number, moment: number, momentSlope: number, liftSlope: number) => {
+    const neutral = cg - momentSlope / liftSlope;
+    return elevatorToTrim(lift, cg, moment, neutral, elevatorSlope, neutral + tail.arm / chord);
+  };
+  const speed = 61;
+  const lift = 2.27e4 / (0.5 * standardDensity(0) * speed ** 2 * 19);
+
+  it('with the book’s roundings −1.94°', () => {
+    expect(Math.abs(byBook(0.08 * 6.5, 0.06, -0.0133, 0.08) + 1.94)).toBeLessThan(0.01);
+  });
+
+  it('unrounded within 0.1° of it, and by shares −1.84°', () => {
+    const unrounded = byBook(lift, momentAtZeroLift, slope, wing.slope);
+    expect(Math.abs(unrounded + 1.94)).toBeLessThan(0.1);
+    const share = tailLiftShare(tail.slope, 1, tail.area / area, tail.downwash);
+    const whole = wholeLiftSlope(wing.slope, share);
+    const neutral = neutralPoint(wing.place, tailStep(wing.place, place, share, whole), 0, 0);
+    const tailLift = tailLiftAtWingZeroLift(tail.slope, 1, tail.area / area, 0, 0, -tail.incidence, 0);
+    const moment = zeroLiftMoment(-0.032, tailLift, place, neutral);
+    const byShares = elevatorToTrim(lift, cg, moment, neutral, elevatorSlope, place);
+    console.info(
+      `Introduction to Flight, ch. 7, elevator to trim: printed −1.94°, unrounded ${unrounded.toFixed(2)}°, ` +
+        `by shares ${byShares.toFixed(2)}°`,
+    );
+    // (−0.032 + 0.054 · 1.55699 − 0.14301 · 0.52421)/(0.008 · 1.55699), by pocket calculator.
+    expect(byShares).toBeCloseTo(-1.838, 2);
   });
 });
 
 describe('neutral point', () => {
   const short = shortFormNeutralPoint(wing.place, volume, tail.slope / wing.slope, tail.downwash, 0);
-  const freeFactor = 1 - (0.04 / tail.slope) * (0.007 / 0.012);
+  const freeFactor = freeStickFactor(0.04 / tail.slope, -0.007, -0.012);
   const free = shortFormNeutralPoint(
     wing.place,
     volume,
@@ -83,6 +121,9 @@ describe('neutral point', () => {
     // 0.24 + 0.013 · 1.81/0.093, by pocket calculator.
     expect(byShares(1)).toBeCloseTo(0.493, 3);
     expect(byShares(freeFactor)).toBeCloseTo(0.441, 3);
+    const fixedShare = tailLiftShare(tail.slope, 1, tail.area / area, tail.downwash);
+    const step = stickFreeStep(byShares(1), place, fixedShare, wing.slope + fixedShare, freeFactor);
+    expect(byShares(1) + step).toBeCloseTo(byShares(freeFactor), 12);
     expect(short - byShares(1)).toBeGreaterThan(0.005);
     expect(short - byShares(1)).toBeLessThan(0.039);
   });
