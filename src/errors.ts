@@ -35,6 +35,10 @@ export const studyFaultCodes = {
   TAIL_BEYOND_BODY: 'a tail beyond the end of the body, without a boom',
   STATIONS_NOT_ASCENDING: 'body stations that do not run aft',
   DUPLICATE_NAME: 'one name used twice',
+  BAD_NAME: 'a name with signs that names do not have',
+  CG_TWICE: 'a stated CG range beside a loading, from which it follows',
+  UNKNOWN_ITEM: 'a loading case with an item that is not listed',
+  ITEM_IN_NO_CASE: 'an item of the loading that no case carries',
 } as const;
 
 export type StudyFaultCode = keyof typeof studyFaultCodes;

@@ -1,9 +1,10 @@
 /** Whether the aeroplane hangs together: at its fixed values, and wherever a single axis breaks it. */
 
 import type { Baseline } from './hold.ts';
-import { inputDefinition } from './inputs.ts';
+import { findInputDefinition, inputDefinition } from './inputs.ts';
 import { isFault, type Quantity, rangeFault } from './quantities.ts';
 import { fewestStations } from './read-body.ts';
+import { impossibleCase } from './read-loading.ts';
 import type { PlacedAxis } from './read-vary.ts';
 import type { Reading } from './reading.ts';
 import type { Span } from './source.ts';
@@ -93,6 +94,9 @@ export function checkVariedShape(
   checkVariedStations(axes, body, reading);
   checkVariedFractions(axes, choices, reading);
   checkVariedTail(axes, baseline, reading);
+  checkVariedCounts(axes, reading);
+  checkVariedFlaps(axes, reading);
+  checkVariedLoading(axes, choices, reading);
   checkVariedCg(axisOf('cg.forward'), axisOf('cg.aft'), choices, baseline, reading);
 }
 
@@ -133,6 +137,49 @@ function checkVariedStations(
         `With this value body.stations[${number}] does not lie aft of the station before it.`,
         'Leave the value out, or vary both stations side by side.',
       );
+      break;
+    }
+  }
+}
+
+function checkVariedCounts(axes: readonly PlacedAxis[], reading: Reading): void {
+  for (const axis of axes) {
+    for (const path of axis.paths.filter((one) => findInputDefinition(one)?.dimension === 'count')) {
+      for (const { span, at } of rowsOf(axis, [path])) {
+        if (Number.isInteger(at.get(path))) continue;
+        const found = `This axis gives ${path} values that are no whole numbers.`;
+        reading.faults.add('OUT_OF_RANGE', span, found, 'Count in whole numbers.');
+        break;
+      }
+    }
+  }
+}
+
+/** Flaps whose inboard end passes the outboard one, whatever the other axes do. */
+function checkVariedFlaps(axes: readonly PlacedAxis[], reading: Reading): void {
+  const ends = ['wing.flaps.span_from', 'wing.flaps.span_to'];
+  const [from, to] = ends.map((path) => axes.find((axis) => axis.paths.includes(path)));
+  const axis = from ?? to;
+  if (!axis || (from && to && from !== to)) return;
+  for (const { span, at } of rowsOf(axis, ends)) {
+    const [inboard, outboard] = ends.map((path) => at.get(path) ?? reading.inputs.get(path) ?? Number.NaN);
+    if (!(inboard! >= outboard!)) continue;
+    const found = 'With this value wing.flaps.span_from does not lie inboard of wing.flaps.span_to.';
+    reading.faults.add('BAND_REVERSED', span, found, 'Leave the value out, or vary both ends side by side.');
+    return;
+  }
+}
+
+/** A loading case that one axis alone makes heavier than the greatest mass. */
+function checkVariedLoading(axes: readonly PlacedAxis[], { loading }: Choices, reading: Reading): void {
+  if (!loading) return;
+  const isMass = (path: string) => /^loading\.(at_most$|.*\.mass$)/.test(path);
+  for (const axis of axes.filter((one) => one.paths.some(isMass))) {
+    for (const { span, at } of rowsOf(axis, axis.paths.filter(isMass))) {
+      const heavy = impossibleCase(loading, (path) => at.get(path) ?? reading.inputs.get(path));
+      if (!heavy) continue;
+      const found = `With this value ${heavy}`;
+      reading.faults.add('OUT_OF_RANGE', span, found, 'Leave the value out, or carry less in that case.');
       break;
     }
   }

@@ -102,7 +102,12 @@ function sizeDependants(path: string, choices: Choices): Dependants {
   };
 }
 
-function cgWords({ cg }: Choices): string[] {
+function cgWords({ cg, loading }: Choices): string[] {
+  if (loading) {
+    const carriers = new Set(loading.items.map((item) => item.carriedBy).filter((by) => by !== 'station'));
+    const riding = carriers.size > 0 ? `; what ${[...carriers].join(' and ')} carry moves with them` : '';
+    return [`the masses and stations of the loading${riding}`];
+  }
   const words = (end: string, kind: CgKind) => {
     if (kind === 'percent_mac') return `cg.${end} in % MAC (it rides with the wing)`;
     if (kind === 'station') return `cg.${end} as a station (it stays where it is)`;

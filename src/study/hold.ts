@@ -7,7 +7,7 @@ import type { HoldRequest, PlacedAxis } from './read-vary.ts';
 import { wingSizes } from './read-wing.ts';
 import type { Reading } from './reading.ts';
 import type { TailChoices, WingChoices, WingSize } from './study.ts';
-import { type Choices, plainPath } from './varied-paths.ts';
+import { type Choices, withoutAeroplane } from './varied-paths.ts';
 
 type PairName = keyof typeof tailPairs;
 const tailPairNames = Object.keys(tailPairs) as PairName[];
@@ -60,7 +60,7 @@ function heldPath(
   known: readonly string[],
   reading: Reading,
 ): string | undefined {
-  const word = plainPath(hold.held);
+  const word = withoutAeroplane(hold.held);
   const path = word.startsWith(`${surface}.`) ? word : `${surface}.${word}`;
   if (known.includes(path)) return path;
   const names = known.map((name) => name.slice(surface.length + 1));
@@ -102,7 +102,7 @@ function disagrees(
 ): boolean {
   const other = exchange.settled.get(about);
   exchange.settled.set(about, other ?? hold);
-  if (!other || plainPath(other.held).split('.').at(-1) === path.split('.').at(-1)) return false;
+  if (!other || withoutAeroplane(other.held).split('.').at(-1) === path.split('.').at(-1)) return false;
   refuse(
     hold,
     `${hold.varied} asks to hold ${hold.held}, and ${other.varied} to hold ${other.held}.`,

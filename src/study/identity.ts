@@ -8,12 +8,17 @@ import type { Study } from './study.ts';
 export function studyIdentity(study: Study): string {
   const { inputs, wing, tail, body, cg, conditions, methods, axes, skip, band, requirements, columns } =
     study;
+  const { flaps, propeller, hinge, control, landingGear, loading, size, corrections } = study;
   const content = {
     inputs: [...inputs].sort(([p], [q]) => (p < q ? -1 : 1)),
     wing,
     tail,
     body: body ?? 'none',
     cg,
+    equipment: { flaps, propeller, hinge, control, landingGear },
+    loading,
+    size,
+    corrections,
     conditions,
     methods,
     axes: axes.map(({ name, paths, values }) => ({

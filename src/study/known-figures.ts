@@ -4,6 +4,7 @@ import { nearestKnown } from './nearest-known.ts';
 import { shorten } from './quantities.ts';
 import type { Reading } from './reading.ts';
 import type { Span } from './source.ts';
+import { type Named, plainPath } from './varied-paths.ts';
 
 /** A figure that a requirement, a preference or the table can name. */
 export interface KnownFigure {
@@ -17,8 +18,14 @@ export interface KnownFigure {
 export class FigureNames {
   readonly #byName: ReadonlyMap<string, KnownFigure> | undefined;
 
-  /** @param figures undefined where they can't be listed; then no name is found, and no fault told */
-  constructor(figures: readonly KnownFigure[] | undefined) {
+  readonly #named: Named;
+
+  /**
+   * @param figures undefined where they can't be listed; then no name is found, and no fault told
+   * @param named   conditions and items that a dotted path may name
+   */
+  constructor(figures: readonly KnownFigure[] | undefined, named: Named) {
+    this.#named = named;
     this.#byName = figures && new Map(figures.map((figure) => [figure.name, figure]));
   }
 
@@ -39,7 +46,7 @@ export class FigureNames {
     fits: (figure: KnownFigure) => boolean,
   ): KnownFigure | undefined {
     if (!this.#byName) return undefined;
-    const name = figureNameOf(word.trim());
+    const name = figureNameOf(plainPath(word, this.#named));
     const found = this.#byName.get(name);
     if (found && fits(found)) return found;
     if (found) {

@@ -108,7 +108,7 @@ export function parseQuantity(text: string, kind: QuantityKind, label: string): 
   const factor = factorOf(unit, kind.dimension, label, text);
   if (typeof factor !== 'number') return factor;
   const quantity = { value, factor, unit, si: inSi(value, factor) };
-  return rangeFault(quantity, kind, label) ?? quantity;
+  return rangeFault(quantity, kind, label) ?? wholeFault(quantity, kind, label) ?? quantity;
 }
 
 export function isFault(read: Quantity | QuantityFault): read is QuantityFault {
@@ -193,6 +193,15 @@ export function rangeFault(quantity: Quantity, kind: QuantityKind, label: string
     remedy: hint
       ? `A bare number is a fraction: write ${shortNumber(value)} % for ${shortNumber(asPercent)}.`
       : 'Give a value inside these limits.',
+  };
+}
+
+function wholeFault({ si }: Quantity, { dimension }: QuantityKind, label: string): QuantityFault | undefined {
+  if (dimension !== 'count' || Number.isInteger(si)) return undefined;
+  return {
+    code: 'OUT_OF_RANGE',
+    found: `${label} is ${shortNumber(si)}, which is no whole number.`,
+    remedy: 'Count in whole numbers.',
   };
 }
 

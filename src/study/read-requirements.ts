@@ -62,15 +62,26 @@ function readBand(map: SourceNode, conditions: readonly Condition[], reading: Re
   const scale = readScale(map, 'fraction_of_mac', marginScale, `require.${bandKey}`, reading);
   const hasEdge = valueIn(map, 'at_least') || valueIn(map, 'at_most');
   if (map.kind === 'map' && !hasEdge) tellNoEdge(map, bandKey, reading);
-  if (lower !== undefined && upper !== undefined && lower > upper)
-    tellReversed(map, `require.${bandKey}`, reading);
+  if (lower && upper && lower.value > upper.value) tellReversed(map, `require.${bandKey}`, reading);
   return {
-    band: { ...(lower !== undefined && { lower }), ...(upper !== undefined && { upper }) },
+    band: {
+      ...(lower && { lower: lower.value, lowerIn: lower.in ?? conditions.map(({ name }) => name) }),
+      ...(upper && {
+        upper: upper.value,
+        upperIn: upper.in ?? conditions.slice(0, 1).map(({ name }) => name),
+      }),
+    },
     requirements: [
-      ...(lower === undefined ? [] : [{ ...bandRequirements.lower, atLeast: lower, scale }]),
-      ...(upper === undefined ? [] : [{ ...bandRequirements.upper, atMost: upper, scale }]),
+      ...(lower ? [{ ...bandRequirements.lower, atLeast: lower.value, scale }] : []),
+      ...(upper ? [{ ...bandRequirements.upper, atMost: upper.value, scale }] : []),
     ],
   };
+}
+
+interface Edge {
+  readonly value: number;
+  /** Names of the conditions in which the edge counts; undefined where the study does not say. */
+  readonly in: readonly string[] | undefined;
 }
 
 function readEdge(
@@ -78,24 +89,34 @@ function readEdge(
   key: 'at_least' | 'at_most',
   conditions: readonly Condition[],
   reading: Reading,
-): number | undefined {
+): Edge | undefined {
   const edge = valueIn(map, key);
   const node = edge?.kind === 'map' ? valueIn(edge, 'value') : edge;
   const where = valueIn(edge, 'in');
-  const names = where?.kind === 'list' ? where.items : where ? [where] : [];
-  for (const name of names) {
-    if (name.kind === 'scalar' && typeof name.value === 'string')
-      checkConditionName(name.value, name.span, conditions, reading);
+  const value = reading.quantity(node, marginKind, `require.${bandKey}.${key}`)?.si;
+  const names = where && readNames(where, `require.${bandKey}.${key}`, conditions, reading);
+  return value === undefined ? undefined : { value, in: names };
+}
+
+/** The conditions named under `in`, in the order of the study. */
+function readNames(
+  where: SourceNode,
+  label: string,
+  conditions: readonly Condition[],
+  reading: Reading,
+): string[] {
+  const nodes = where.kind === 'list' ? where.items : [where];
+  if (nodes.length === 0) {
+    const remedy = `Name conditions, or write ${allConditions}.`;
+    reading.faults.add('MISSING_KEY', where.span, `${label} counts in no condition.`, remedy);
   }
-  if (where?.kind === 'list' && where.items.length === 0) {
-    reading.faults.add(
-      'MISSING_KEY',
-      where.span,
-      `require.${bandKey}.${key} counts in no condition.`,
-      `Name conditions, or write ${allConditions}.`,
-    );
+  const wanted = new Set<string>();
+  for (const node of nodes) {
+    if (node.kind !== 'scalar' || typeof node.value !== 'string') continue;
+    checkConditionName(node.value, node.span, conditions, reading);
+    wanted.add(node.value);
   }
-  return reading.quantity(node, marginKind, `require.${bandKey}.${key}`)?.si;
+  return conditions.map(({ name }) => name).filter((name) => wanted.has(name) || wanted.has(allConditions));
 }
 
 function tellNoEdge(map: SourceNode, name: string, reading: Reading): void {

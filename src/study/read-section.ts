@@ -1,4 +1,5 @@
 import { type Section, sectionByName, sections } from '../methods/sections-table.ts';
+import { shareOfSectionMaximumLift } from './input-row.ts';
 import { offer } from './nearest-known.ts';
 import { shorten } from './quantities.ts';
 import type { Reading } from './reading.ts';
@@ -36,6 +37,14 @@ export function readSection(surface: Surface, map: SourceNode, reading: Reading)
   }
   tellUnknownSection(node.value, node.span, surface, reading);
   return enterUnknown(surface, node.span, reading);
+}
+
+/** Reads the greatest lift of a whole wing or tail; left out, it follows from the section's. */
+export function readMaximumLift(surface: Surface, map: SourceNode, reading: Reading): void {
+  const path = `${surface}.maximum_lift`;
+  if (reading.take(map, 'maximum_lift', path)) return;
+  const value = `${shareOfSectionMaximumLift} × that of its section`;
+  reading.assumptions.push({ path, value, source: 'common practice, no source' });
 }
 
 function enterNumbers(surface: Surface, section: Section, span: Span, reading: Reading): void {

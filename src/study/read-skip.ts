@@ -45,7 +45,7 @@ function readTest(
   choices: Choices,
   reading: Reading,
 ): SkipTest | undefined {
-  const path = plainPath(word);
+  const path = plainPath(word, choices);
   const axis = axes.find((one) => one.paths.includes(path));
   const definition = definitionIn(path, choices.cg);
   if (!axis || !definition) {

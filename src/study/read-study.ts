@@ -7,17 +7,22 @@ import { FigureNames, type KnownFigure } from './known-figures.ts';
 import { parseYaml } from './parse-yaml.ts';
 import { readBody } from './read-body.ts';
 import { readCg } from './read-cg.ts';
-import { readConditions } from './read-conditions.ts';
+import { checkConditionNeeds, readConditions, withFlapsSettled } from './read-conditions.ts';
+import { readControl, readLandingGear } from './read-control.ts';
+import { readFlaps } from './read-flaps.ts';
+import { checkCaseMasses, readLoading } from './read-loading.ts';
 import { readMethods } from './read-methods.ts';
+import { readPropeller } from './read-propeller.ts';
 import { readColumns, readKeep, readPreferences, readRequirements } from './read-requirements.ts';
+import { readCorrections, readSizeRange, readSizing, type SizeRange } from './read-size.ts';
 import { readSkip } from './read-skip.ts';
 import { readTail } from './read-tail.ts';
 import { type PlacedAxis, readVary } from './read-vary.ts';
 import { readWing } from './read-wing.ts';
 import { Reading } from './reading.ts';
-import { mapIn, type SourceNode, wordIn } from './source.ts';
+import { firstOf, mapIn, type SourceNode, wordIn } from './source.ts';
 import { checkStructure } from './structure.ts';
-import type { AircraftClass, Axis, BodyChoices, Study } from './study.ts';
+import type { AircraftClass, Axis, BodyChoices, Condition, Study } from './study.ts';
 import type { Choices } from './varied-paths.ts';
 
 export type { KnownFigure } from './known-figures.ts';
@@ -49,14 +54,15 @@ function readTree(
   reading: Reading,
 ): Study | undefined {
   checkStructure(root, reading.faults);
-  const conditions = readConditions(root, reading);
+  const named = readConditions(root, reading);
   const methods = readMethods(root, reading);
-  const aeroplane = readAeroplane(root, reading);
+  const aeroplane = readAeroplane(root, named, reading);
   if (!aeroplane) return undefined;
-  const { choices, body, axes } = aeroplane;
+  const { choices, equipment, body, axes } = aeroplane;
   const show = wordIn(root, 'show') === 'US' ? 'US' : 'metric';
   const question = wordIn(root, 'question');
   const aircraftClass = wordIn(root, 'class') as AircraftClass | undefined;
+  const corrections = readCorrections(root, reading);
   const outline: Study = {
     file,
     text,
@@ -67,8 +73,8 @@ function readTree(
     inputs: reading.inputs,
     ...choices,
     ...(body && { body }),
-    hinge: choices.tail.allMoving ? 'none' : 'theory',
-    conditions,
+    ...equipment,
+    ...(corrections && { corrections }),
     methods,
     axes: axes.map(withoutPlaces),
     skip: readSkip(root, axes, choices, reading),
@@ -79,48 +85,129 @@ function readTree(
     assumptions: reading.assumptions,
     held: describeHeld(axes, choices, reading.inputs, show),
   };
-  return withFigures(outline, root, knownFigures, reading);
+  return withFigures(outline, readSizeRange(root, axes, choices, reading), root, knownFigures, reading);
 }
 
 interface Aeroplane {
   readonly choices: Choices;
+  readonly equipment: Equipment;
   readonly body: BodyChoices | undefined;
   readonly axes: readonly PlacedAxis[];
 }
 
+/** What an aeroplane may have besides wing, tail and body. */
+type Equipment = Pick<Study, 'flaps' | 'propeller' | 'hinge' | 'control' | 'landingGear'>;
+
 /** The aeroplane, what varies, and what is held: one knot, because a hold changes what is given. */
-function readAeroplane(root: SourceNode, reading: Reading): Aeroplane | undefined {
+function readAeroplane(
+  root: SourceNode,
+  named: readonly Condition[],
+  reading: Reading,
+): Aeroplane | undefined {
   const map = mapIn(root, 'aeroplane');
-  const [wingMap, tailMap, cgMap] = ['wing', 'tail', 'cg'].map((key) => mapIn(map, key));
-  if (!map || !wingMap || !tailMap || !cgMap) return undefined;
-  reading.take(map, 'mass', 'mass');
+  const [wingMap, tailMap] = ['wing', 'tail'].map((key) => mapIn(map, key));
+  if (!map || !wingMap || !tailMap) return undefined;
+  const loading = readLoading(map, reading);
+  readMass(map, loading, reading);
+  const wingChoices = readWing(wingMap, reading);
+  const { tail: tailChoices, hinge } = readTail(tailMap, reading);
   const given: Choices = {
-    wing: readWing(wingMap, reading),
-    tail: readTail(tailMap, reading),
-    cg: readCg(cgMap, reading),
+    wing: wingChoices,
+    tail: tailChoices,
+    cg: readCg(map, loading, reading),
+    conditions: named,
+    ...(loading && { loading }),
   };
   const body = readBody(map, reading);
+  const equipment = readEquipment(map, wingMap, hinge, reading);
   const wing = wingBaseline(reading.inputs, given.wing);
   const baseline = { wing, tail: tailBaseline(reading.inputs, given.tail, wing) };
   checkDerivedSizes(given, baseline, reading);
   checkTailPlace(given, body, baseline, reading);
   checkCg(given, baseline, reading);
+  if (loading) checkCaseMasses(map, loading, reading);
   const { axes, holds } = readVary(root, given, reading);
   checkVariedShape(axes, given, body, baseline, reading);
-  return { choices: applyHolds(holds, axes, given, baseline, reading), body, axes };
+  const conditions = withFlapsSettled(named, axes, reading);
+  checkConditionNeeds(root, conditions, equipment, reading);
+  const choices = { ...applyHolds(holds, axes, given, baseline, reading), conditions };
+  return { choices, equipment, body, axes };
+}
+
+function readEquipment(
+  aeroplane: SourceNode,
+  wing: SourceNode,
+  hinge: Study['hinge'],
+  reading: Reading,
+): Equipment {
+  const flaps = readFlaps(wing, reading);
+  const propeller = readPropeller(aeroplane, reading);
+  const control = readControl(aeroplane, reading);
+  const landingGear = readLandingGear(aeroplane, reading);
+  if (control) assumeElevatorSize(reading);
+  return {
+    hinge,
+    ...(flaps && { flaps }),
+    ...(propeller && { propeller }),
+    ...(control && { control }),
+    ...(landingGear && { landingGear }),
+  };
+}
+
+/** Stick forces need the elevator's size, which follows from the tail where it is not given. */
+function assumeElevatorSize({ inputs, assumptions }: Reading): void {
+  for (const path of ['tail.elevator.area', 'tail.elevator.chord']) {
+    if (inputs.has(path)) continue;
+    const source = 'not given; follows from the tail and the elevator’s fractions of it';
+    assumptions.push({ path, value: 'worked out', source });
+  }
+}
+
+/** The mass may be left out beside a loading: it is then the heaviest case's. */
+function readMass(aeroplane: SourceNode, loading: Study['loading'], reading: Reading): void {
+  if (reading.take(aeroplane, 'mass', 'mass')) return;
+  if (loading) {
+    reading.assumptions.push({
+      path: 'mass',
+      value: 'that of the heaviest loading case',
+      source: 'not given',
+    });
+    return;
+  }
+  reading.inputs.set('mass', Number.NaN);
+  reading.faults.addBeside(
+    'MISSING_KEY',
+    firstOf(aeroplane),
+    'aeroplane has no mass.',
+    'Add mass: to aeroplane.',
+  );
 }
 
 function withoutPlaces({ name, paths, values }: PlacedAxis): Axis {
   return { name, paths, values };
 }
 
-/** Adds what names figures: requirements, preferences, columns. */
-function withFigures(outline: Study, root: SourceNode, knownFigures: FiguresOf, reading: Reading): Study {
-  const figures = new FigureNames(figuresOf(outline, knownFigures, reading));
+/** Adds what names figures: requirements, preferences, columns, and what sizing is to reach. */
+function withFigures(
+  outline: Study,
+  range: SizeRange | undefined,
+  root: SourceNode,
+  knownFigures: FiguresOf,
+  reading: Reading,
+): Study {
+  const figures = new FigureNames(figuresOf(outline, knownFigures, reading), outline);
+  const size = readSizing(range, root, figures, reading);
   const { band, requirements } = readRequirements(root, outline.conditions, figures, reading);
   const preferences = readPreferences(root, figures, reading);
   const columns = readColumns(root, figures, reading);
-  return { ...outline, band, requirements, preferences, ...(columns && { columns }) };
+  return {
+    ...outline,
+    ...(size && { size }),
+    band,
+    requirements,
+    preferences,
+    ...(columns && { columns }),
+  };
 }
 
 function figuresOf(

@@ -1,9 +1,10 @@
 import { customaryDynamicPressureRatio } from '../methods/tail.ts';
-import { readSection } from './read-section.ts';
+import { readHinge } from './read-hinge.ts';
+import { readMaximumLift, readSection } from './read-section.ts';
 import { readSweep } from './read-wing.ts';
 import type { Reading } from './reading.ts';
 import { firstOf, keySpan, type SourceNode, valueIn, wordIn } from './source.ts';
-import type { TailChoices } from './study.ts';
+import type { HingeKind, TailChoices } from './study.ts';
 
 /** The tail's three pairs; of each the study gives one. */
 export const tailPairs = {
@@ -15,8 +16,13 @@ export const tailPairs = {
 const layouts: readonly TailChoices['layout'][] = ['conventional', 'mid', 'T', 'V'];
 const customaryLayout = 'conventional';
 
+export interface ReadTail {
+  readonly tail: TailChoices;
+  readonly hinge: HingeKind;
+}
+
 /** Reads `aeroplane.tail` into the inputs. */
-export function readTail(map: SourceNode, reading: Reading): TailChoices {
+export function readTail(map: SourceNode, reading: Reading): ReadTail {
   const layout = readLayout(map, reading);
   const allMoving = isTrue(valueIn(map, 'all_moving'));
   const size = readOneOf(map, tailPairs.size, reading);
@@ -26,10 +32,11 @@ export function readTail(map: SourceNode, reading: Reading): TailChoices {
   const sweep = readSweep(map, 'tail', reading);
   readVAngle(map, layout, reading);
   readDynamicPressure(map, layout, reading);
-  readElevator(map, allMoving, reading);
+  const hinge = readElevator(map, allMoving, reading);
   const section = readSection('tail', map, reading);
-  const choices = { layout, allMoving, size, place, planform, sweep };
-  return section === undefined ? choices : { ...choices, section };
+  readMaximumLift('tail', map, reading);
+  const tail = { layout, allMoving, size, place, planform, sweep };
+  return { hinge, tail: section === undefined ? tail : { ...tail, section } };
 }
 
 function isTrue(node: SourceNode | undefined): boolean {
@@ -100,9 +107,9 @@ function readDynamicPressure(map: SourceNode, layout: TailChoices['layout'], rea
 }
 
 const travelKeys = ['up', 'down'] as const;
-const hingedKeys = ['chord_fraction', 'span_fraction', 'effectiveness_ratio'] as const;
+const hingedKeys = ['chord_fraction', 'span_fraction', 'effectiveness_ratio', 'area', 'chord'] as const;
 
-function readElevator(map: SourceNode, allMoving: boolean, reading: Reading): void {
+function readElevator(map: SourceNode, allMoving: boolean, reading: Reading): HingeKind {
   const elevator = valueIn(map, 'elevator') ?? {
     kind: 'map' as const,
     entries: new Map(),
@@ -120,4 +127,5 @@ function readElevator(map: SourceNode, allMoving: boolean, reading: Reading): vo
       );
     }
   }
+  return readHinge(elevator, allMoving, reading);
 }

@@ -125,7 +125,7 @@ function readAxisOfMaps(
   reading: Reading,
 ): AxisSpec | undefined {
   const first = list.items.find((item): item is MapNode => item.kind === 'map')!;
-  const prefix = plainPath(key);
+  const prefix = plainPath(key, choices);
   const columns = [...first.entries].map(([name, entry]) => {
     const path = prefix === '' ? name : `${prefix}.${name}`;
     const definition = variedNumber(path, entry.key, choices, reading);
@@ -134,7 +134,7 @@ function readAxisOfMaps(
     const quantities = nodes.map((node) => reading.quantity(node, definition, `vary.${path}`));
     if (!quantities.every((quantity) => quantity !== undefined)) return undefined;
     return listColumn(
-      path,
+      definition.path,
       quantities,
       nodes.map((node) => node!.span),
       list.span,
@@ -182,16 +182,22 @@ function readTied(
     const columns = [...group.entries].map(([key, entry]) =>
       readNumber(key, entry.key, entry.value, choices, taken, holds, reading),
     );
-    if (!columns.every((column) => column !== undefined) || !lengthsAgree(columns, group, reading)) return [];
+    if (!columns.every((column) => column !== undefined) || !lengthsAgree(columns, group, choices, reading))
+      return [];
     return [{ name: columns.map((column) => column.path).join(' + '), span: firstOf(group), columns }];
   });
 }
 
-function lengthsAgree(columns: readonly ColumnSpec[], group: MapNode, reading: Reading): boolean {
+function lengthsAgree(
+  columns: readonly ColumnSpec[],
+  group: MapNode,
+  choices: Choices,
+  reading: Reading,
+): boolean {
   const wanted = columns[0]!.count;
   const other = columns.find((column) => column.count !== wanted);
   if (!other) return true;
-  const entry = [...group.entries].find(([key]) => plainPath(key) === other.path);
+  const entry = [...group.entries].find(([key]) => plainPath(key, choices) === other.path);
   reading.faults.add(
     'TIED_LENGTHS_DIFFER',
     entry?.[1].key ?? other.span,

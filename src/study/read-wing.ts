@@ -1,5 +1,5 @@
 import { inputDefinition } from './inputs.ts';
-import { readSection } from './read-section.ts';
+import { readMaximumLift, readSection } from './read-section.ts';
 import type { Reading } from './reading.ts';
 import { firstOf, keySpan, type ListNode, type SourceNode, valueIn } from './source.ts';
 import type { SweepKind, WingChoices, WingSize } from './study.ts';
@@ -29,6 +29,7 @@ export function readWing(map: SourceNode, reading: Reading): WingChoices {
   for (const key of ['incidence', 'washout', 'root_leading_edge', 'height'])
     reading.take(map, key, `wing.${key}`);
   const section = readSection('wing', map, reading);
+  readMaximumLift('wing', map, reading);
   const choices = {
     form,
     given,

@@ -3,6 +3,7 @@ import { inputDefinition } from './inputs.ts';
 import { nearestKnown } from './nearest-known.ts';
 import { isFault, parseQuantity } from './quantities.ts';
 import type { Study } from './study.ts';
+import { plainPath } from './varied-paths.ts';
 
 export interface Replacement {
   readonly path: string;
@@ -15,7 +16,8 @@ export interface Replacement {
  * Throws UsageError BAD_ARGUMENT for a path that is no number of this study, or an unreadable value.
  */
 export function readReplacement(study: Study, text: string): Replacement {
-  const [, path = '', quantity = ''] = /^\s*([^=]+?)\s*=\s*(.*?)\s*$/.exec(text) ?? [];
+  const [, word = '', quantity = ''] = /^\s*([^=]+?)\s*=\s*(.*?)\s*$/.exec(text) ?? [];
+  const path = plainPath(word, study);
   if (!study.inputs.has(path)) {
     const nearest = nearestKnown(path, [...study.inputs.keys()]);
     const offer = nearest === undefined ? 'aftlimit figures STUDY lists them.' : `Did you mean ${nearest}?`;

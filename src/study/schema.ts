@@ -83,6 +83,26 @@ const panel = z.strictObject({
   dihedral: optionalInput('wing.panels[n].dihedral'),
 });
 
+const flaps = z
+  .strictObject({
+    kind: z
+      .enum(['plain', 'slotted'])
+      .meta({ description: 'Kind of flap, with chord_fraction, span_from and span_to.' })
+      .optional(),
+    chord_fraction: optionalInput('wing.flaps.chord_fraction'),
+    span_from: optionalInput('wing.flaps.span_from'),
+    span_to: optionalInput('wing.flaps.span_to'),
+    at: optionalInput('wing.flaps.at'),
+    zero_lift_angle: optionalInput('wing.flaps.zero_lift_angle'),
+    moment: optionalInput('wing.flaps.moment'),
+    maximum_lift: optionalInput('wing.flaps.maximum_lift'),
+    downwash: optionalInput('wing.flaps.downwash'),
+  })
+  .meta({
+    description:
+      'Flaps by their kind, chord and span, or by own increments of the wing at the deflection `at`.',
+  });
+
 const wing = z
   .strictObject({
     area: optionalInput('wing.area'),
@@ -102,8 +122,19 @@ const wing = z
     root_leading_edge: input('wing.root_leading_edge'),
     height: optionalInput('wing.height'),
     section: section('wing'),
+    maximum_lift: optionalInput('wing.maximum_lift'),
+    flaps: flaps.optional(),
   })
   .meta({ description: 'The wing: any two of area, span, aspect_ratio and root_chord settle its size.' });
+
+const hinge = z
+  .strictObject({
+    alpha: optionalInput('tail.elevator.hinge.alpha'),
+    delta: optionalInput('tail.elevator.hinge.delta'),
+    alpha_factor: optionalInput('tail.elevator.hinge.alpha_factor'),
+    delta_factor: optionalInput('tail.elevator.hinge.delta_factor'),
+  })
+  .meta({ description: 'Hinge-moment slopes, or factors on those of thin-aerofoil theory.' });
 
 const elevator = z
   .strictObject({
@@ -112,8 +143,11 @@ const elevator = z
     effectiveness_ratio: optionalInput('tail.elevator.effectiveness_ratio'),
     up: optionalInput('tail.elevator.up'),
     down: optionalInput('tail.elevator.down'),
+    area: optionalInput('tail.elevator.area'),
+    chord: optionalInput('tail.elevator.chord'),
+    hinge: hinge.optional(),
   })
-  .meta({ description: 'The elevator; of an all-moving tail its travel only.' });
+  .meta({ description: 'The elevator; of an all-moving tail its travel and hinge only.' });
 
 const tail = z
   .strictObject({
@@ -138,6 +172,7 @@ const tail = z
     incidence: optionalInput('tail.incidence'),
     dynamic_pressure_ratio: optionalInput('tail.dynamic_pressure_ratio'),
     section: section('tail').optional(),
+    maximum_lift: optionalInput('tail.maximum_lift'),
     elevator: elevator.optional(),
   })
   .meta({
@@ -191,14 +226,101 @@ const cg = z
   })
   .meta({ description: 'The range of the centre of gravity, forward and aft end.' });
 
+const propeller = z
+  .union([
+    z.literal('none').meta({ description: 'No propeller.' }),
+    z.strictObject({
+      place: z.enum(['tractor', 'pusher']).meta({ description: 'Ahead of the wing, or behind it.' }),
+      diameter: input('propeller.diameter'),
+      blades: input('propeller.blades'),
+      blade_chord: input('propeller.blade_chord'),
+      blade_angle: input('propeller.blade_angle'),
+      station: input('propeller.station'),
+      above_datum: optionalInput('propeller.above_datum'),
+      power: input('propeller.power'),
+      efficiency: optionalInput('propeller.efficiency'),
+      tail_in_slipstream: optionalInput('propeller.tail_in_slipstream'),
+    }),
+  ])
+  .meta({ description: 'The propeller, or none; none when left out.' });
+
+const control = z
+  .strictObject({
+    kind: z.enum(['stick', 'wheel']).meta({ description: 'What the pilot holds.' }),
+    gearing: input('control.gearing'),
+    spring: optionalInput('control.spring'),
+    bobweight: optionalInput('control.bobweight'),
+  })
+  .meta({ description: 'The pitch control; without it there are no stick forces.' });
+
+const landingGear = z
+  .strictObject({
+    kind: z.enum(['nose_wheel', 'tail_wheel']).meta({ description: 'Where the third wheel is.' }),
+    main_wheels: optionalInput('landing_gear.main_wheels'),
+    rotation_speed: optionalInput('landing_gear.rotation_speed'),
+    ground_angle: optionalInput('landing_gear.ground_angle'),
+    below_datum: optionalInput('landing_gear.below_datum'),
+  })
+  .meta({ description: 'The landing gear; for the forward limit at nose-wheel lift-off.' });
+
+const loadingItem = z
+  .strictObject({
+    mass: input('loading.items[n].mass'),
+    station: optionalInput('loading.items[n].station'),
+    carried_by: z
+      .enum(['wing', 'tail', 'body'])
+      .meta({ description: 'What the item moves with, in place of a station.' })
+      .optional(),
+    at: optionalInput('loading.items[n].at'),
+    height: optionalInput('loading.items[n].height'),
+    burns: z.boolean().meta({ description: 'true for what is used up in flight.' }).optional(),
+  })
+  .meta({ description: 'One item: its mass and where it lies.' });
+
+const loading = z
+  .strictObject({
+    empty: z
+      .strictObject({
+        mass: input('loading.empty.mass'),
+        station: input('loading.empty.station'),
+        height: optionalInput('loading.empty.height'),
+      })
+      .meta({ description: 'The empty aeroplane.' })
+      .optional(),
+    items: z.record(z.string(), loadingItem).meta({ description: 'What is carried, by name.' }),
+    cases: z
+      .record(
+        z.string(),
+        z.array(z.string()).meta({ description: 'Items aboard; those that burn, in the order of burning.' }),
+      )
+      .meta({ description: 'Loading cases by name.' }),
+    at_most: optionalInput('loading.at_most'),
+  })
+  .meta({ description: 'Masses and loading cases, from which the CG range follows; in place of cg.' });
+
 const aeroplane = z
-  .strictObject({ mass: input('mass'), wing, tail, body, cg })
+  .strictObject({
+    mass: optionalInput('mass'),
+    wing,
+    tail,
+    body,
+    cg: cg.optional(),
+    propeller: propeller.optional(),
+    control: control.optional(),
+    landing_gear: landingGear.optional(),
+    loading: loading.optional(),
+  })
   .meta({ description: 'The aeroplane with its fixed values: the baseline of the study.' });
 
 const condition = z.strictObject({
-  name: words('A name for the condition, used in require.'),
-  speed: input('conditions[n].speed'),
+  name: words('A name for the condition, used in require, vary and figure names.'),
+  speed: optionalInput('conditions[n].speed'),
+  lift_coefficient: optionalInput('conditions[n].lift_coefficient'),
+  times_stall: optionalInput('conditions[n].times_stall'),
   height: input('conditions[n].height'),
+  power: optionalInput('conditions[n].power'),
+  flaps: optionalInput('conditions[n].flaps'),
+  wing_above_ground: optionalInput('conditions[n].wing_above_ground'),
 });
 
 const methods = z
@@ -323,6 +445,27 @@ const require = z
   .catchall(requirement.meta({ description: 'Limits on one figure, under a name of your own.' }))
   .meta({ description: 'What a combination must keep to be feasible.' });
 
+const size = z
+  .strictObject({
+    choose: words('Path of the number that is chosen in each combination, such as tail.area.'),
+    so_that: words('The figure that is to take a value.'),
+    is: anyNumber.meta({ description: 'The value that the figure is to take.' }),
+    between: z
+      .array(anyNumber)
+      .meta({ description: 'Least and greatest value that the number may be given.' }),
+  })
+  .meta({ description: 'A number chosen in each combination so that a figure takes a value.' });
+
+const corrections = z
+  .strictObject({
+    neutral_point: anyNumber.meta({
+      description: 'Added to the neutral point of every condition. Unit: %. Limits: -20 % to 20 %.',
+      examples: ['-1.2 %'],
+    }),
+    source: words('Where the correction comes from, such as a flight test.'),
+  })
+  .meta({ description: 'Corrections from measurement.' });
+
 const preference = z.union([
   z.enum(['less', 'more']),
   z.strictObject({ nearest: anyNumber.meta({ description: 'The value sought.' }) }),
@@ -341,12 +484,12 @@ export const studySchema = z
       .meta({ description: 'Kind of aircraft; only for notes on customary ranges.' })
       .optional(),
     aeroplane,
-    conditions: z
-      .array(condition)
-      .meta({ description: 'Flight conditions; this version evaluates exactly one.' }),
+    conditions: z.array(condition).meta({ description: 'Flight conditions, one to twelve.' }),
     methods: methods.optional(),
     vary: vary.optional(),
     skip: skip.optional(),
+    size: size.optional(),
+    corrections: corrections.optional(),
     require: require.optional(),
     prefer: z
       .record(z.string(), preference)

@@ -2,21 +2,35 @@
 import { findInputDefinition, type InputDefinition } from './inputs.ts';
 import { offer } from './nearest-known.ts';
 import { shorten } from './quantities.ts';
+import { speedKeys } from './read-conditions.ts';
 import { tailPairs } from './read-tail.ts';
 import { wingSizes } from './read-wing.ts';
 import type { Reading } from './reading.ts';
 import type { Span } from './source.ts';
-import type { CgChoices, TailChoices, WingChoices } from './study.ts';
+import type { CgChoices, Study } from './study.ts';
 
-export interface Choices {
-  readonly wing: WingChoices;
-  readonly tail: TailChoices;
-  readonly cg: CgChoices;
-}
+export type Choices = Pick<Study, 'wing' | 'tail' | 'cg' | 'conditions' | 'loading'>;
+
+/** What a path may call by name instead of by number. */
+export type Named = Pick<Study, 'conditions' | 'loading'>;
 
 /** Paths are relative to `aeroplane`; writing it out is no fault. */
-export function plainPath(word: string): string {
+export function withoutAeroplane(word: string): string {
   return word.trim().replace(/^aeroplane\.?/, '');
+}
+
+/**
+ * The path that a study's author means. A condition or an item of the loading
+ * may be named: `conditions.cruise.power` → `conditions[1].power`.
+ */
+export function plainPath(word: string, { conditions, loading }: Named): string {
+  const path = withoutAeroplane(word);
+  const [, list, name, rest = ''] = /^(conditions|loading\.items)\.([\w-]+)(\..*)?$/.exec(path) ?? [];
+  if (list === undefined) return path;
+  const entries: readonly { readonly name: string }[] =
+    list === 'conditions' ? conditions : (loading?.items ?? []);
+  const index = entries.findIndex((entry) => entry.name === name);
+  return index < 0 ? path : `${list}[${index + 1}]${rest}`;
 }
 
 /** The definition of a number as this study gives it. */
@@ -33,24 +47,44 @@ export function variedNumber(
   choices: Choices,
   reading: Reading,
 ): InputDefinition | undefined {
-  const path = plainPath(word);
+  const path = plainPath(word, choices);
   const definition = definitionIn(path, choices.cg);
   if (definition && reading.inputs.has(path)) return definition;
-  const given = definition ? givenInstead(path, choices) : undefined;
-  if (given) {
-    const pair = given.join(' and ');
+  const settled = definition ? settledBy(path, choices, reading) : undefined;
+  if (settled) {
     reading.faults.add(
       'DERIVED_VARIED',
       span,
-      `${path} follows from ${pair}, which the study gives.`,
-      `Vary ${given.join(' or ')}, or give ${path.slice(path.indexOf('.') + 1)} in aeroplane in place of one of them.`,
+      `${path} follows from ${settled.given.join(' and ')}, which the study gives.`,
+      settled.remedy,
     );
   } else tellNoNumber(word, path, definition !== undefined, span, reading);
   return undefined;
 }
 
+interface Settled {
+  readonly given: readonly string[];
+  readonly remedy: string;
+}
+
 /** The given numbers that settle a derived one; undefined for a number that nothing settles. */
-export function givenInstead(path: string, { wing, tail }: Choices): string[] | undefined {
+function settledBy(path: string, choices: Choices, reading: Reading): Settled | undefined {
+  const key = path.slice(path.lastIndexOf('.') + 1);
+  const shape = givenSizes(path, choices);
+  if (shape) {
+    const remedy = `Vary ${shape.join(' or ')}, or give ${key} in aeroplane in place of one of them.`;
+    return { given: shape, remedy };
+  }
+  if (choices.loading && /^(mass$|cg\.)/.test(path))
+    return { given: ['the loading'], remedy: 'Vary masses or stations of the loading.' };
+  const condition = /^(conditions\[\d+\])\./.exec(path)?.[1];
+  const speed = speedKeys.find((other) => reading.inputs.has(`${condition}.${other}`));
+  if (!condition || !speed || !(speedKeys as readonly string[]).includes(key)) return undefined;
+  const given = `${condition}.${speed}`;
+  return { given: [given], remedy: `Vary ${given}, or give ${key} in the condition in its place.` };
+}
+
+function givenSizes(path: string, { wing, tail }: Choices): string[] | undefined {
   if (path === 'wing.span' && wing.form === 'panels' && wing.panelWidth === 'width')
     return ['the widths of the panels'];
   if ((wingSizes as readonly string[]).includes(path)) {
