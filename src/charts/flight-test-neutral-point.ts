@@ -56,7 +56,7 @@ export function slopeKey({
             text: 'its 95 % limits',
           },
         ]),
-    ...(predictedNeutralPoint === undefined
+    ...(predictedNeutralPoint === undefined || !Number.isFinite(predictedNeutralPoint)
       ? []
       : [{ symbol: { kind: 'point' as const, point: predictedPoint }, text: `predicted ${name}` }]),
   ];
@@ -107,12 +107,12 @@ function onZero(at: number | undefined, x: Scale): Position[] {
   return at !== undefined && at >= x.from && at <= x.to ? [{ x: at, y: 0 }] : [];
 }
 
-/** A limit or an extrapolated point farther off than this many times the flown range leaves the plot. */
-const farthest = 4;
+/** A limit or an extrapolated point farther off than this many times the flown range, and than so many % MAC, leaves the plot. */
+const farthest = { timesFlown: 4, percentMac: 15 } as const;
 function cgScale({ flown, neutralPoint, predictedNeutralPoint }: FlightTestSlopesData): Scale {
   const cgs = flown.map(({ cg }) => cg).filter(Number.isFinite);
   const [forward, aft] = [Math.min(...cgs), Math.max(...cgs)];
-  const reach = Math.max(8, (aft - forward) * farthest);
+  const reach = Math.max(farthest.percentMac, (aft - forward) * farthest.timesFlown);
   const wanted = [
     neutralPoint?.at,
     neutralPoint?.least,
@@ -191,14 +191,17 @@ function limitsLayers({ neutralPoint }: FlightTestSlopesData, x: Scale, y: Scale
 }
 
 const belowMarks = 20;
-/** Extrapolated and predicted point in numbers under their marks, moved apart where they would touch. */
+/** Extrapolated and predicted point in numbers under their marks, moved apart where they would touch; an arrow to those beyond the plot. */
 function pointLabels(data: FlightTestSlopesData, x: Scale, y: Scale, plot: PlotSize): Layer {
   const wanted = [
     { at: data.neutralPoint?.at ?? Number.NaN, word: 'found' },
     { at: data.predictedNeutralPoint ?? Number.NaN, word: 'predicted' },
   ]
-    .filter(({ at }) => at >= x.from && at <= x.to)
-    .map(({ at, word }) => ({ at, text: `${word} ${numberText(at, 1)} %` }));
+    .filter(({ at }) => Number.isFinite(at))
+    .map(({ at, word }) => {
+      const said = `${word} ${numberText(at, 1)} %`;
+      return { at, text: at < x.from ? `← ${said}` : at > x.to ? `${said} →` : said };
+    });
   const perPixel = (x.to - x.from) / plot.width;
   const places = spread(
     wanted.map(({ at, text }) => ({ at, size: textWidth(text, textSize.small) * perPixel })),

@@ -2,12 +2,12 @@ import type { FlightTestSlopesData, FlownCg, StraightLine } from './flight-test-
 import { slopeKey, slopePanel } from './flight-test-neutral-point.ts';
 import { clipToFrame } from './geometry/clip.ts';
 import type { Point } from './geometry/polyline.ts';
+import { spread } from './geometry/spread.ts';
 import { keyRow } from './key-row.ts';
-import { type Layer, type PointShape, points } from './marks.ts';
-import { type NamedLine, namedLineLayers, nameLabels, placeNames } from './named-lines.ts';
+import { type Layer, labels, type PointShape, points, polylines } from './marks.ts';
 import { type Panel, type PixelMap, panel, pixelMap, type Scale } from './panel.ts';
 import { type ChartSpec, grid, sheet } from './sheet.ts';
-import { cleanText, ellipsize, numberText } from './text-width.ts';
+import { cleanText, numberText } from './text-width.ts';
 import { colours, textSize } from './theme.ts';
 
 const plot = { width: 350, height: 330 } as const;
@@ -20,7 +20,7 @@ const predictedLine = { color: colours.ink, width: 1.2, dash: [5, 3] } as const;
  * against CG, carried on to zero: the neutral point with its 95 % limits.
  */
 export function flightTestSlopes(data: FlightTestSlopesData): ChartSpec {
-  const width = 2 * (plot.width + 70);
+  const width = 2 * (plot.width + 70) + 60;
   const panels = [measuredPanel(data), slopePanel(data, plot)];
   const measuredKey = [
     {
@@ -37,7 +37,7 @@ export function flightTestSlopes(data: FlightTestSlopesData): ChartSpec {
     [grid(panels, 2), keyRow([...measuredKey, ...slopeKey(data)], width)],
     [
       neutralPointInWords(data),
-      'Never flown to: approach the aft limit in small steps, under qualified supervision, and stay away from neutral',
+      'It is extrapolated, never flown to: approach the aft limit in small steps, under qualified supervision',
     ],
   );
 }
@@ -79,36 +79,35 @@ function pointOf(index: number) {
 function measuredPanel(data: FlightTestSlopesData): Panel {
   const scales = measuredScales(data);
   const map = pixelMap(plot.width, plot.height, scales.x, scales.y);
-  const lineOf = (line: StraightLine) => straightLine(line, scales.x, map);
-  const fitted = data.flown.map(
-    (flown): NamedLine => ({
-      label: cgText(flown),
-      lines: lineOf(flown.fitted),
-      style: fittedLine,
-      best: 0.85,
-    }),
-  );
-  const marks = data.flown.map(positionsOf);
-  const markRoom = marks.flat().map((position) => ({ ...map.toPixels(position), radius: 5 }));
-  const names = placeNames(fitted, markRoom, plot, textSize.small);
-  const texts = names.flatMap((name) => name?.spots ?? []);
-  const predicted = data.flown.flatMap((flown) =>
-    flown.predicted === undefined ? [] : lineOf(flown.predicted),
-  );
+  const lineOf = (line: StraightLine | undefined) =>
+    line === undefined ? [] : straightLine(line, scales.x, map).map((part) => part.map(map.fromPixels));
   const layers: Layer[] = [
-    ...namedLineLayers({ label: '', lines: predicted, style: predictedLine }, texts, plot, map),
-    ...fitted.flatMap((line) => namedLineLayers(line, texts, plot, map)),
-    ...marks.map((positions, index) => points(positions, pointOf(index))),
-    nameLabels(names, map, textSize.small),
+    polylines(
+      data.flown.flatMap(({ predicted }) => lineOf(predicted)),
+      predictedLine,
+    ),
+    polylines(
+      data.flown.flatMap(({ fitted }) => lineOf(fitted)),
+      fittedLine,
+    ),
+    ...data.flown.map((flown, index) => points(positionsOf(flown), pointOf(index))),
+    labels(namesAtEnd(data.flown, scales), { size: textSize.small, align: 'left', dx: 6 }),
   ];
-  const left = data.flown.filter((_, index) => names[index] === null).map(cgText);
-  return panel({
-    ...plot,
-    ...scales,
-    layers,
-    title: ['Measured at each CG position'],
-    subtitle: left.length === 0 ? [] : [ellipsize(`also ${left.join(', ')}`, plot.width, textSize.small)],
-  });
+  return panel({ ...plot, ...scales, layers, title: ['Measured at each CG position'] });
+}
+
+/** The CG of each fitted line beside its end, moved apart where they would touch. */
+function namesAtEnd(flown: readonly FlownCg[], { x, y }: { readonly x: Scale; readonly y: Scale }) {
+  const ended = flown
+    .map((each) => ({ at: each.fitted.atNoLift + each.fitted.slope * x.to, text: cgText(each) }))
+    .filter(({ at }) => Number.isFinite(at));
+  const size = (textSize.small * 1.2 * (y.to - y.from)) / plot.height;
+  const places = spread(
+    ended.map(({ at }) => ({ at, size })),
+    y.from,
+    y.to,
+  );
+  return ended.map(({ text }, index) => ({ x: x.to, y: places[index]!, text }));
 }
 
 function cgText({ cg }: FlownCg): string {
@@ -127,7 +126,9 @@ function measuredScales(data: FlightTestSlopesData): { x: Scale; y: Scale } {
   const greatest = Math.max(0.1, ...all.map(({ x }) => x)) * 1.06;
   const heights = [
     ...all.map(({ y }) => y),
-    ...data.flown.map(({ fitted }) => fitted.atNoLift).filter(Number.isFinite),
+    ...data.flown
+      .flatMap(({ fitted: { atNoLift, slope } }) => [atNoLift, atNoLift + slope * greatest])
+      .filter(Number.isFinite),
   ];
   const [least, most] = [Math.min(0, ...heights), Math.max(0, ...heights)];
   const room = (most - least || 1) * 0.08;

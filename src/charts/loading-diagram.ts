@@ -15,6 +15,7 @@ import {
   namedLineLayers,
   nameLabels,
   placeNames,
+  placeTags,
 } from './named-lines.ts';
 import { niceValues } from './nice-steps.ts';
 import { type PixelMap, panel, pixelMap, type Scale } from './panel.ts';
@@ -54,7 +55,7 @@ export interface LoadingDiagramData {
 const plot = { width: 640, height: 440 } as const;
 const arrowLength = 9;
 const pathRoom = 4;
-const longestName = 200;
+const longestName = 170;
 const pathLine = { color: colours.accent, width: 1.8 } as const;
 const fullPoint = { shape: 'circle', size: 60, fill: colours.accent, width: 1 } as const;
 const burntPoint = {
@@ -75,17 +76,21 @@ export function loadingDiagram(data: LoadingDiagramData): ChartSpec {
   const pathSpots = paths.flatMap((path) => spotsAlong(path, pathRoom, pathRoom));
   const ends = markedEnds(data, map);
   const limitNames = placeNames(limits, [...pathSpots, ...ends], plot);
-  const nameSpots = limitNames.flatMap((name) => name?.spots ?? []);
+  const tags = placeTags(limits, limitNames, [...pathSpots, ...ends], plot);
+  const nameSpots = [...limitNames, ...tags].flatMap((text) => text?.spots ?? []);
   const keepClear = [...limits.flatMap(lineRoom), ...nameSpots, ...pathSpots];
   const caseNames = placeCaseNames(data, map, ends, keepClear);
   const layers: Layer[] = [
     ...limits.flatMap((limit) => namedLineLayers(limit, nameSpots, plot, map)),
     nameLabels(limitNames, map),
+    nameLabels(tags, map),
     ...pathLayers(data, paths, map),
     labels(caseNames.labels, { size: textSize.small, weight: weight.strong }),
     ...stationAxis(data.station, scales),
   ];
-  const unnamed = limits.flatMap((limit, index) => (limitNames[index] === null ? [limitKey(limit)] : []));
+  const unnamed = limits.flatMap((limit, index) =>
+    limitNames[index] === null ? [limitKey(limit, tags[index]!)] : [],
+  );
   return sheet(
     data.heading,
     plot.width + 50,
@@ -101,6 +106,7 @@ function rangeInWords({ cases }: LoadingDiagramData): string {
   const cgs = cases.flatMap(({ states }) => states.map(({ cg }) => cg)).filter(Number.isFinite);
   if (cgs.length === 0) return 'No loading case has a known CG';
   const [forward, aft] = [Math.min(...cgs), Math.max(...cgs)];
+  if (forward === aft) return `CG of these cases: ${numberText(aft, 1)} % MAC`;
   return `CG range of these cases: ${numberText(forward, 1)} to ${numberText(aft, 1)} % MAC`;
 }
 
@@ -118,7 +124,9 @@ function keyItems(data: LoadingDiagramData): KeyItem[] {
           },
         ]
       : []),
-    { symbol: { kind: 'none' }, text: 'Hatch ticks stand on the forbidden side' },
+    ...(data.limits.length > 0 || data.greatestMass !== undefined
+      ? [{ symbol: { kind: 'none' as const }, text: 'Hatch ticks stand on the forbidden side' }]
+      : []),
   ];
 }
 
@@ -231,7 +239,7 @@ interface CaseNames {
   readonly left: KeyItem[];
 }
 
-/** Names beside the full end of their paths, else beside the burnt one, else in words in the key. */
+/** Names beside the full end of their paths, else beside the burnt one; without room there, a number and the name in the key. */
 function placeCaseNames(
   { cases, empty }: LoadingDiagramData,
   map: PixelMap,
@@ -260,11 +268,19 @@ function placeCaseNames(
       continue;
     }
     const name = ellipsize(label, longestName, textSize.small, weight.strong);
-    if (!place(name, [full, burnt])) placed.left.push(inWords(label, full, burnt));
+    if (place(name, [full, burnt])) continue;
+    const number = String(placed.left.length + 1);
+    const found = place(number, [full, burnt]);
+    placed.left.push(found ? numbered(number, label) : inWords(label, full, burnt));
   }
   return placed;
 }
 
+function numbered(number: string, label: string): KeyItem {
+  return { symbol: { kind: 'none' }, text: `${number} ${cleanText(label)}` };
+}
+
+/** Where even a number has no room, the case is told by its mass and CG. */
 function inWords(label: string, full: MassPoint, burnt: MassPoint): KeyItem {
   const state = ({ mass, cg }: MassPoint) => `${massText(mass)} at ${numberText(cg, 1)} %`;
   const way = full === burnt ? state(full) : `${state(full)} to ${state(burnt)}`;

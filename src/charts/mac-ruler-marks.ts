@@ -97,15 +97,17 @@ export function conditionKey({ conditions = [], rows }: MacRulerData): KeyItem[]
 const limitLine = { color: colours.ink, width: 1.6 } as const;
 const hatchLine = { color: colours.ink, width: 1 } as const;
 
-/** The control limit across bracket and strip, hatched forward of it. */
+/** How far the control limit stands out of the strip [px]. */
+const overhang = 3;
+/** The control limit across the strip, hatched forward of it. */
 export function controlLimitLayers(
   { controlLimit }: MacRulerRow,
-  top: number,
-  bottom: number,
+  strip: { readonly y: number; readonly y2: number },
   x: Scale,
   width: number,
 ): Layer[] {
   if (controlLimit === undefined || !Number.isFinite(controlLimit.at)) return [];
+  const [top, bottom] = [strip.y - overhang, strip.y2 + overhang];
   const { at } = controlLimit;
   const perPixel = (x.to - x.from) / width;
   const line = [

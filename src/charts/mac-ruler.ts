@@ -116,7 +116,7 @@ function rowLayers(row: MacRulerRow, top: number, extra: number, x: Scale): Laye
     ),
     points(known([{ x: row.neutralPoint, y: middle }]), neutralPointMark),
     ...conditionLayers(row.neutralPoints ?? [], strip.y2, x, width),
-    ...controlLimitLayers(row, top + lane.bracket, strip.y2, x, width),
+    ...controlLimitLayers(row, strip, x, width),
     ...windowLayers(row, top, x),
     ...nameLayers(row, top, x),
     labels(belowLabels(row, top + lane.below + extra, x), { size: textSize.small, baseline: 'top' }),

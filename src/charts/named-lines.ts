@@ -5,7 +5,7 @@ import { cutOut, type Point, type Polyline, type Spot, spotsAlong } from './geom
 import type { KeyItem } from './key-row.ts';
 import { type Layer, type LineStyle, labels, polylines, segments } from './marks.ts';
 import type { PixelMap } from './panel.ts';
-import { ellipsize, textWidth } from './text-width.ts';
+import { cleanText, ellipsize, textWidth } from './text-width.ts';
 import { colours, textSize } from './theme.ts';
 
 /** A line of a plot with its name on it; a limit is hatched on the side that it forbids. Positions in pixels. */
@@ -21,7 +21,7 @@ export interface NamedLine {
 
 /** Distance between hatch ticks along a limit, and length of a tick [px]. */
 const tick = { spacing: 9, length: 8 } as const;
-const plainRoom = 5;
+const plainRoom = 3;
 const longestName = 260;
 
 /** Dash patterns that tell limits apart, in their order. */
@@ -67,14 +67,36 @@ export function placeNames(
   size: number = textSize.label,
 ): (LineLabel | null)[] {
   const placed: (LineLabel | null)[] = [];
-  all.forEach(({ label, lines, best = 0.7 }, index) => {
+  all.forEach(({ label, lines, side, best = 0.7 }, index) => {
     const text = ellipsize(label, longestName, size);
     const others = all.flatMap((line, other) => (other === index ? [] : lineRoom(line)));
     const taken = placed.flatMap((each) => each?.spots ?? []);
-    const request = { text, width: textWidth(text, size) + 4, height: size + 2, lines, best };
+    const height = side === undefined ? size : size + 2;
+    const request = { text, width: textWidth(text, size) + 4, height, lines, best };
     placed.push(placeOnLines([request], [...clear, ...others, ...taken], frame)[0] ?? null);
   });
   return placed;
+}
+
+const tagSize = 14;
+/** A letter on each line whose name found no room, for the key; null where not even that fits. */
+export function placeTags(
+  all: readonly NamedLine[],
+  names: readonly (LineLabel | null)[],
+  clear: readonly Spot[],
+  frame: Frame,
+): (LineLabel | null)[] {
+  const taken = [...clear, ...names.flatMap((name) => name?.spots ?? [])];
+  let letter = 'A'.codePointAt(0)!;
+  return names.map((name, index) => {
+    if (name !== null) return null;
+    const others = all.flatMap((line, other) => (other === index ? [] : lineRoom(line)));
+    const text = String.fromCodePoint(letter++);
+    const request = { text, width: tagSize, height: tagSize, lines: all[index]!.lines, best: 0.2 };
+    const [tag = null] = placeOnLines([request], [...taken, ...others], frame);
+    taken.push(...(tag?.spots ?? []));
+    return tag;
+  });
 }
 
 /** The names where they were placed. */
@@ -115,7 +137,10 @@ export function namedLineLayers(
   ];
 }
 
-/** Key of a line whose name found no room on it. */
-export function limitKey({ label, style, side }: NamedLine): KeyItem {
-  return { symbol: { kind: 'line', style, ticks: side !== undefined }, text: label };
+/** Key of a line whose name found no room on it, with its letter if that did. */
+export function limitKey({ label, lines, style, side }: NamedLine, tag: LineLabel | null): KeyItem {
+  if (lines.length === 0) return { symbol: { kind: 'none' }, text: `${cleanText(label)}: not in this plot` };
+  return tag === null
+    ? { symbol: { kind: 'line', style, ticks: side !== undefined }, text: label }
+    : { symbol: { kind: 'letter', letter: tag.text, style }, text: label };
 }

@@ -11,6 +11,7 @@ import {
   namedLineLayers,
   nameLabels,
   placeNames,
+  placeTags,
 } from './named-lines.ts';
 import { type PixelMap, panel, pixelMap, type Scale } from './panel.ts';
 import { type ChartHeading, type ChartSpec, sheet } from './sheet.ts';
@@ -65,14 +66,18 @@ export function tailSizing(data: TailSizingData): ChartSpec {
   ];
   const limits = data.limits.map((limit, index) => limitLine(limit, index, data.sizes, map));
   const names = placeNames(limits, clear, plot);
-  const texts = names.flatMap((name) => name?.spots ?? []);
+  const tags = placeTags(limits, names, clear, plot);
+  const texts = [...names, ...tags].flatMap((text) => text?.spots ?? []);
   const layers = [
     ...limits.flatMap((limit) => namedLineLayers(limit, texts, plot, map)),
     nameLabels(names, map),
+    nameLabels(tags, map),
     ...(data.baseline === undefined ? [] : baselineLayers(data, data.baseline)),
     ...(fit === null ? [] : fitLayers(data, fit, map)),
   ];
-  const unnamed = limits.flatMap((limit, index) => (names[index] === null ? [limitKey(limit)] : []));
+  const unnamed = limits.flatMap((limit, index) =>
+    names[index] === null ? [limitKey(limit, tags[index]!)] : [],
+  );
   return sheet(
     data.heading,
     plot.width + 50,

@@ -4,6 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { z } from 'zod';
 import { drawSvg } from '../../src/charts/draw-spec.ts';
 import { cleanText } from '../../src/charts/text-width.ts';
+import { controlCharts } from './control-samples.ts';
 import { everyChart, heading, longHeading } from './samples.ts';
 import { outside, overlaps, textsOfSvg } from './texts-of-svg.ts';
 
@@ -11,7 +12,7 @@ import { outside, overlaps, textsOfSvg } from './texts-of-svg.ts';
 const schemaFile = createRequire(import.meta.url).resolve('vega-lite/vega-lite-schema.json');
 const schema = z.fromJSONSchema(JSON.parse(readFileSync(schemaFile, 'utf8')));
 
-describe.each(Object.entries(everyChart))('%s', (_name, chart) => {
+describe.each(Object.entries({ ...everyChart, ...controlCharts }))('%s', (_name, chart) => {
   it('is valid Vega-Lite, draws without a warning, and keeps its texts apart and inside', async () => {
     const spec = chart();
     expect(schema.safeParse(JSON.parse(JSON.stringify(spec))).success).toBe(true);
