@@ -1,7 +1,18 @@
-import { StudyError, type StudyFault } from '../../src/errors.ts';
+import { StudyError, type StudyFault, type StudyFaultCode } from '../../src/errors.ts';
 import type { KnownFigure } from '../../src/study/known-figures.ts';
 import { readStudy } from '../../src/study/read-study.ts';
 import type { Study } from '../../src/study/study.ts';
+
+/** A study with one fault, and where it is told. */
+export interface FaultCase {
+  readonly what: string;
+  readonly text: string;
+  readonly code: StudyFaultCode;
+  readonly mark: string;
+  /** A piece of the line that the fault must stand on; the mark itself when left out. */
+  readonly line?: string;
+  readonly says?: RegExp;
+}
 
 /** An invented aeroplane whose numbers are all different, so that a swap shows. */
 export const baseStudy = `title: Base study
@@ -48,6 +59,7 @@ export const figures: readonly KnownFigure[] = [
   { name: 'tail_span', dimension: 'length' },
   { name: 'tail_area', dimension: 'area' },
   { name: 'tail_arm', dimension: 'length' },
+  { name: 'conditions_2_power', dimension: 'ratio' },
   { name: 'static_margin_aft', dimension: 'fraction_of_mac' },
   { name: 'feasible', dimension: 'count', onlyInTable: true },
 ];

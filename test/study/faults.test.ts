@@ -1,17 +1,8 @@
 /** Each code with its place: the marked text and its line. */
 import { expect, test } from 'vitest';
 import { type StudyFaultCode, studyFaultCodes } from '../../src/errors.ts';
-import { baseStudy, edited, errorOf, marked, varying } from './base-study.ts';
-
-interface Case {
-  readonly what: string;
-  readonly text: string;
-  readonly code: StudyFaultCode;
-  readonly mark: string;
-  /** A piece of the line that the fault must stand on; the mark itself when left out. */
-  readonly line?: string;
-  readonly says?: RegExp;
-}
+import { aeroplaneCases } from './aeroplane-cases.ts';
+import { baseStudy, edited, errorOf, type FaultCase, marked, varying } from './base-study.ts';
 
 const panels = '    panels: [{width: 3 m, taper: 0.8}, {width: 1.7 m, taper: 0.6}]\n';
 const fixedTaper = ['  wing.taper: [0.4, 0.5, 0.6]\n', ''] as const;
@@ -28,7 +19,7 @@ const fractionWing = (sum: number) =>
 const withRequire = (line: string) =>
   edited(['  handy_tail: {figure: tail_span, at_most: 3.5 m}', `  ${line}`]);
 
-const cases: readonly Case[] = [
+const shapeCases: readonly FaultCase[] = [
   // YAML
   {
     what: 'a bracket left open',
@@ -257,14 +248,6 @@ const cases: readonly Case[] = [
     says: /wing.aspect_ratio/,
   },
   { what: 'infinity', text: edited(['taper: 0.62', 'taper: 1e999']), code: 'OUT_OF_RANGE', mark: '1e999' },
-  {
-    what: 'a second condition',
-    text: edited(['vary:', '  - {name: climb, speed: 70 kt, height: 0 m}\nvary:']),
-    code: 'OUT_OF_RANGE',
-    mark: 'name',
-    line: 'climb',
-    says: /exactly one/,
-  },
   {
     what: 'one body station',
     text: edited([
@@ -631,6 +614,8 @@ const cases: readonly Case[] = [
     mark: '7 m',
   },
 ];
+
+const cases: readonly FaultCase[] = [...shapeCases, ...aeroplaneCases];
 
 test.each(cases)('$code: $what', ({ text, code, mark, line, says }) => {
   const error = errorOf(text);

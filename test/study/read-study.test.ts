@@ -53,7 +53,9 @@ test('what a number is given as stands in the choices', () => {
   });
   expect(study.body).toEqual({ stations: 3, boom: false });
   expect(study.cg).toEqual({ forward: 'percent_mac', aft: 'percent_mac', heightGiven: true });
-  expect(study.conditions).toEqual([{ name: 'cruise' }]);
+  expect(study.conditions).toEqual([
+    { name: 'cruise', speedAs: 'speed', power: 'idle', flapsDown: false, groundEffect: false },
+  ]);
   expect(study.inputs.has('wing.aspect_ratio')).toBe(false);
   expect(study.inputs.has('tail.area')).toBe(false);
 });
@@ -114,7 +116,7 @@ test('requirements keep the order of the file, with a scale each', () => {
   const study = read(
     `${edited(['  handy_tail: {figure: tail_span, at_most: 3.5 m}', '  handy_tail: {figure: tail.span, at_most: 3.5 m}\n  in_range: true\n  wing_area: {at_least: 10 m^2, at_most: 12 m^2, scale: 0.3 m^2}'])}`,
   );
-  expect(study.band).toEqual({ lower: 0.05, upper: 0.2 });
+  expect(study.band).toEqual({ lower: 0.05, upper: 0.2, lowerIn: ['cruise'], upperIn: ['cruise'] });
   expect(study.requirements).toEqual([
     { name: 'static_margin.at_least', figure: 'static_margin_aft', atLeast: 0.05, scale: 0.01 },
     { name: 'static_margin.at_most', figure: 'static_margin_forward', atMost: 0.2, scale: 0.01 },
