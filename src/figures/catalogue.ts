@@ -28,6 +28,27 @@ export type FigureName = keyof typeof entries;
 
 /** Figures that show the inside of the calculation: in worksheets, not in the bulk table. */
 const worksheetOnly: ReadonlySet<FigureName> = new Set<FigureName>([
+  'flap_zero_lift_change',
+  'flap_moment',
+  'flap_maximum_lift',
+  'flap_downwash',
+  'maximum_lift',
+  'stall_speed',
+  'wing_lift_slope_away',
+  'ground_induction',
+  'thrust_coefficient',
+  'thrust_on_wing',
+  'propeller_inflow',
+  'propeller_normal_slope',
+  'propeller_stream_gradient',
+  'tail_pressure_ratio',
+  'tail_downwash_gradient',
+  'lift_slope_rest',
+  'propeller_lift_share',
+  'propeller_position',
+  'tail_position',
+  'neutral_point_rest',
+
   'wing_formula_sweep_half_chord',
   'body_moment_forward',
   'body_moment_aft',

@@ -31,6 +31,28 @@ const conditionFigures: ReadonlySet<string> = new Set([
   'static_margin_forward',
   'static_margin_aft',
   'outside_fitted_range',
+  'maximum_lift',
+  'stall_speed',
+  'flap_zero_lift_change',
+  'flap_moment',
+  'flap_maximum_lift',
+  'flap_downwash',
+  'wing_lift_slope_away',
+  'ground_induction',
+  'thrust_coefficient',
+  'thrust_on_wing',
+  'propeller_inflow',
+  'propeller_normal_slope',
+  'propeller_stream_gradient',
+  'tail_pressure_ratio',
+  'tail_downwash_gradient',
+  'lift_slope_rest',
+  'propeller_lift_share',
+  'propeller_position',
+  'tail_position',
+  'neutral_point_rest',
+  'neutral_point_propeller',
+  'neutral_point_correction',
 ]);
 
 /** Bits of the single range checks, which the flags are gathered from. */
@@ -40,9 +62,9 @@ export function isConditionFigure(name: string): boolean {
   return conditionFigures.has(name) || rangeBit.test(name);
 }
 
-/** Names of the figures that every condition has, in no particular order. */
-export function conditionFigureNames(): string[] {
-  return [...conditionFigures];
+/** Whether a figure of a condition is in the catalogue; bits of single checks are not. */
+export function isTabledFigure(name: string): boolean {
+  return conditionFigures.has(name);
 }
 
 /** `neutral_point` in the condition `cruise` → `neutral_point_cruise`. */

@@ -106,3 +106,20 @@ export function dynamicPressure(calibratedSpeed: number, height: number): number
 export function liftCoefficient(mass: number, calibratedSpeed: number, height: number, area: number): number {
   return (mass * gravity) / (dynamicPressure(calibratedSpeed, height) * area);
 }
+
+/** Mach number at a dynamic pressure q [Pa] and pressure height [m], √(2q/(γ p)) [-]. Exact. */
+export function machFromDynamicPressure(pressure: number, height: number): number {
+  return Math.sqrt((2 * pressure) / (heatRatio * standardPressure(height)));
+}
+
+/** Calibrated airspeed [m/s] from Mach number [-] and pressure height [m]; the reverse of `machFromCalibratedSpeed`. Exact, subsonic. */
+export function calibratedSpeedFromMach(mach: number, height: number): number {
+  const impactHere = (1 + isentropicFactor * mach ** 2) ** isentropicExponent - 1;
+  const impact = (impactHere * standardPressure(height)) / seaLevelPressure;
+  return seaLevelSoundSpeed * Math.sqrt(((1 + impact) ** (1 / isentropicExponent) - 1) / isentropicFactor);
+}
+
+/** Dynamic pressure [Pa] that carries a mass [kg] at a lift coefficient > 0 [-] on an area [m²]: m g/(S C_L). Exact. */
+export function dynamicPressureAtLift(mass: number, liftCoefficient: number, area: number): number {
+  return (mass * gravity) / (area * liftCoefficient);
+}

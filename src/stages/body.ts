@@ -2,6 +2,7 @@ import { bodyMomentSlope, multhoppAft, multhoppForward } from '../methods/body.t
 import { quickBodyMoment } from '../methods/body-estimates.ts';
 import { bodyStationPlace, bodyWidthAt } from '../methods/body-stations.ts';
 import type { Study } from '../study/study.ts';
+import { nilStage } from './nil.ts';
 import type { Stage } from './stage.ts';
 
 /** Where wing and tail stand in the baseline; body stations move with respect to these [m]. */
@@ -41,18 +42,6 @@ export function bodyMomentStages({ body, methods }: BodyStudy, places: BaselineP
   const stations = new BodyReader(body);
   const moment = methods.body_moment === 'multhopp' ? multhoppStage : quickStage(stations, places);
   return [forwardStage(stations, places), moment];
-}
-
-function nilStage(name: string, writes: readonly string[]): Stage {
-  return {
-    name,
-    reads: [],
-    writes,
-    cost: 1,
-    kernel: (count, _, outputs) => {
-      for (const output of outputs) output.fill(0, 0, count);
-    },
-  };
 }
 
 const readsPerStation = 2;

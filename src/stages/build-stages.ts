@@ -1,14 +1,17 @@
 import { figureOfInput } from '../figures/study-figures.ts';
-import type { Study } from '../study/study.ts';
+import type { Condition, Study } from '../study/study.ts';
 import type { BaselinePlaces } from './body.ts';
 import { bodyMomentStages, bodyShapeStages, wakeLengthStage } from './body.ts';
-import { liftCoefficientStage, machStage } from './condition.ts';
+import { maximumLiftStage, speedStages } from './condition.ts';
 import { stagesOfConditions } from './conditions.ts';
 import { angleOfAttackStage, downwashStage, machRatioStage } from './downwash.ts';
+import { flapDownwashStages, flapStages } from './flaps.ts';
 import { governingStages } from './governing.ts';
+import { groundLiftStage } from './ground-effect.ts';
 import { loadingRangeStages, marginsStage, windowStage } from './loading-range.ts';
-import { heightStage, neutralPointStage, sharesStage } from './neutral-point.ts';
+import { heightStage, neutralPointStage, sharesStage, stepsStage } from './neutral-point.ts';
 import { rangeStages, reasonStage } from './out-of-range.ts';
+import { propellerShareStages, propellerStages, tailStreamStages } from './propeller.ts';
 import { requirementEdges, requirementsStage } from './requirements.ts';
 import { runOnce } from './run-once.ts';
 import { skipStage } from './skip.ts';
@@ -28,6 +31,7 @@ import { wingPlanformStage, wingStationsStage } from './wing-planform.ts';
 export function buildStages(study: Study): Stage[] {
   const skip = study.skip.length === 0 ? [] : [skipStage(study.skip, figureOfInput(study))];
   const places = baselinePlaces(study);
+  const ofConditions = stagesOfConditions(study, (condition) => conditionStages(study, condition, places));
   return [
     ...skip,
     ...placeStages(study),
@@ -40,8 +44,8 @@ export function buildStages(study: Study): Stage[] {
     elevatorStage(study),
     ...bodyShapeStages(study, places),
     ...loadingRangeStages(study),
-    ...stagesOfConditions(study, () => conditionStages(study, places)),
-    ...governingStages(study),
+    ...ofConditions.stages,
+    ...governingStages(study, ofConditions.common),
     windowStage(study),
     reasonStage,
     requirementsStage(requirementEdges(study)),
@@ -49,20 +53,29 @@ export function buildStages(study: Study): Stage[] {
 }
 
 /** Stages of one flight condition. */
-function conditionStages(study: Study, places: BaselinePlaces): Stage[] {
+function conditionStages(study: Study, condition: Condition, places: BaselinePlaces): Stage[] {
+  const lift = condition.groundEffect
+    ? [wingLiftStage(study, 'wing_lift_slope_away'), groundLiftStage]
+    : [wingLiftStage(study)];
   return [
-    machStage,
-    liftCoefficientStage,
-    wingLiftStage(study),
+    ...flapStages(study, condition),
+    maximumLiftStage(study),
+    ...speedStages(condition),
+    ...lift,
     carryOverStage,
     tailLiftStage(study),
-    angleOfAttackStage,
+    angleOfAttackStage(study),
     machRatioStage(study),
     downwashStage(study),
+    ...flapDownwashStages(study, condition),
     ...bodyMomentStages(study, places),
-    sharesStage,
+    ...propellerStages(study, condition),
+    ...tailStreamStages(study, condition),
+    sharesStage(study),
+    stepsStage(study),
+    ...propellerShareStages(study),
     heightStage(study),
-    neutralPointStage,
+    neutralPointStage(study),
     marginsStage,
     ...rangeStages(study),
   ];

@@ -1,4 +1,4 @@
-import { conditionFigureName, isConditionFigure } from '../figures/condition-figures.ts';
+import { conditionFigureName, isConditionFigure, isTabledFigure } from '../figures/condition-figures.ts';
 import type { Condition, Study } from '../study/study.ts';
 import type { Stage } from './stage.ts';
 
@@ -23,6 +23,12 @@ export function forCondition(stage: Stage, condition: Condition, number: number)
   };
 }
 
+/** The stages of all conditions, and the figures that each of several conditions has, under their plain names. */
+export interface ConditionStages {
+  readonly stages: readonly Stage[];
+  readonly common: readonly string[];
+}
+
 /**
  * Stages of all conditions. With one condition its figures carry no name; with several each has its
  * own, and `governingStages` gives the plain names to the condition that governs.
@@ -31,9 +37,15 @@ export function forCondition(stage: Stage, condition: Condition, number: number)
 export function stagesOfConditions(
   { conditions }: Pick<Study, 'conditions'>,
   stagesOf: (condition: Condition) => readonly Stage[],
-): Stage[] {
-  if (conditions.length === 1) return [...stagesOf(conditions[0])];
-  return conditions.flatMap((condition, index) =>
-    stagesOf(condition).map((stage) => forCondition(stage, condition, index + 1)),
-  );
+): ConditionStages {
+  if (conditions.length === 1) return { stages: stagesOf(conditions[0]), common: [] };
+  const ofEach = conditions.map((condition) => stagesOf(condition));
+  const written = ofEach.map((stages) => new Set(stages.flatMap((stage) => stage.writes)));
+  const isFigure = (name: string | null): name is string => name !== null && isTabledFigure(name);
+  return {
+    stages: ofEach.flatMap((stages, index) =>
+      stages.map((stage) => forCondition(stage, conditions[index], index + 1)),
+    ),
+    common: [...written[0]].filter(isFigure).filter((name) => written.every((names) => names.has(name))),
+  };
 }

@@ -4,26 +4,30 @@ import type { Study } from '../study/study.ts';
 import { liftSlopeBy } from './lift-slope.ts';
 import type { Stage } from './stage.ts';
 
-/** Angle of attack of the root chord at the condition's lift, from which the wake's height follows. */
-export const angleOfAttackStage: Stage = {
-  name: 'angle of attack',
-  reads: [
-    'lift_coefficient',
-    'wing_lift_slope',
-    'wing_section_zero_lift_angle',
-    'wing_washout',
-    'mac_spanwise_station',
-    'wing_span',
-  ],
-  writes: ['root_angle_of_attack'],
-  cost: 10,
-  kernel: (count, [cl, a, zeroLift, washout, macStation, span], [alpha]) => {
-    for (let row = 0; row < count; row++) {
-      const macFraction = (2 * macStation[row]) / span[row];
-      alpha[row] = rootAngleOfAttack(cl[row], a[row], zeroLift[row], washout[row], macFraction);
-    }
-  },
-};
+/** Angle of attack of the root chord at the condition's lift, flaps included, from which the wake's height follows. */
+export function angleOfAttackStage({ flaps }: Pick<Study, 'flaps'>): Stage {
+  return {
+    name: 'angle of attack',
+    reads: [
+      'lift_coefficient',
+      'wing_lift_slope',
+      'wing_section_zero_lift_angle',
+      'wing_washout',
+      'mac_spanwise_station',
+      'wing_span',
+      ...(flaps === undefined ? [] : ['flap_zero_lift_change']),
+    ],
+    writes: ['root_angle_of_attack'],
+    cost: 10,
+    kernel: (count, [cl, a, zeroLift, washout, macStation, span, byFlaps], [alpha]) => {
+      for (let row = 0; row < count; row++) {
+        const macFraction = (2 * macStation[row]) / span[row];
+        const angle = zeroLift[row] + (byFlaps === undefined ? 0 : byFlaps[row]);
+        alpha[row] = rootAngleOfAttack(cl[row], a[row], angle, washout[row], macFraction);
+      }
+    },
+  };
+}
 
 /** a(M)/a(0) of the wing, which the handbook's low-speed form is scaled with. */
 export function machRatioStage({ methods }: Pick<Study, 'methods'>): Stage {

@@ -1,4 +1,4 @@
-import { conditionFigureName, conditionFigureNames } from '../figures/condition-figures.ts';
+import { conditionFigureName } from '../figures/condition-figures.ts';
 import type { Condition, Study } from '../study/study.ts';
 import { governingMarginsStage } from './loading-range.ts';
 import type { Stage } from './stage.ts';
@@ -13,19 +13,19 @@ const notCopied = new Set(['outside_fitted_range', 'static_margin_forward', 'sta
  * figure under its plain name as it is in the one that governs the aft margin. The lower edge of the
  * band holds in `lowerIn`, the upper in `upperIn`; the least neutral point of the first governs aft,
  * the greatest of the others forward.
+ * @param common figures that every condition has, under their plain names
  */
-export function governingStages(study: GovernedStudy): Stage[] {
+export function governingStages(study: GovernedStudy, common: readonly string[]): Stage[] {
   const { conditions, band } = study;
   if (conditions.length === 1) return [];
   const positions = (names: readonly string[] | undefined) => {
     const wanted = names ?? conditions.map(({ name }) => name);
     return conditions.flatMap(({ name }, k) => (wanted.includes(name) ? [k] : []));
   };
-  const copied = conditionFigureNames().filter((name) => !notCopied.has(name));
   return [
     extremeStage('aft', conditions, positions(band.lowerIn), -1),
     extremeStage('forward', conditions, positions(band.upperIn), 1),
-    ...copied.map((name) => copyStage(name, conditions)),
+    ...common.filter((name) => !notCopied.has(name)).map((name) => copyStage(name, conditions)),
     governingMarginsStage,
     unionStage(conditions),
   ];

@@ -8,28 +8,34 @@ import {
   wholeLiftSlope,
 } from '../methods/neutral-point.ts';
 import type { Study } from '../study/study.ts';
+import { hasTailStream } from './propeller.ts';
 import type { Stage } from './stage.ts';
 
-/** Where the tail's lift acts, and its share in the lift of the whole. */
-export const sharesStage: Stage = {
-  name: 'shares of lift',
-  reads: [
-    'tail_lift_slope',
-    'tail_dynamic_pressure_ratio',
-    'tail_area',
-    'wing_area',
-    'downwash_gradient',
-    'wing_body_lift_slope',
-  ],
-  writes: ['tail_lift_share', 'lift_slope'],
-  cost: 5,
-  kernel: (count, [at, eta, tailArea, area, downwash, withBody], [share, whole]) => {
-    for (let row = 0; row < count; row++) {
-      share[row] = tailLiftShare(at[row], eta[row], tailArea[row] / area[row], downwash[row]);
-      whole[row] = wholeLiftSlope(withBody[row], share[row]);
-    }
-  },
-};
+type PowerStudy = Pick<Study, 'propeller' | 'conditions'>;
+
+/** Share of the tail in the lift of the whole. With a propeller the whole is what the propeller does not carry. */
+export function sharesStage(study: PowerStudy): Stage {
+  const stream = hasTailStream(study);
+  return {
+    name: 'shares of lift',
+    reads: [
+      'tail_lift_slope',
+      stream ? 'tail_pressure_ratio' : 'tail_dynamic_pressure_ratio',
+      'tail_area',
+      'wing_area',
+      stream ? 'tail_downwash_gradient' : 'downwash_gradient',
+      'wing_body_lift_slope',
+    ],
+    writes: ['tail_lift_share', study.propeller === undefined ? 'lift_slope' : 'lift_slope_rest'],
+    cost: 5,
+    kernel: (count, [at, eta, tailArea, area, downwash, withBody], [share, whole]) => {
+      for (let row = 0; row < count; row++) {
+        share[row] = tailLiftShare(at[row], eta[row], tailArea[row] / area[row], downwash[row]);
+        whole[row] = wholeLiftSlope(withBody[row], share[row]);
+      }
+    },
+  };
+}
 
 /** Effect of the wing's height over the CG; nothing when the study does not give the CG's height. */
 export function heightStage({ cg }: Pick<Study, 'cg'>): Stage {
@@ -67,45 +73,77 @@ export function heightStage({ cg }: Pick<Study, 'cg'>): Stage {
   };
 }
 
-/** The neutral point, step by step. */
-export const neutralPointStage: Stage = {
-  name: 'neutral point',
-  reads: [
-    'wing_aerodynamic_centre',
-    'tail_arm',
-    'mac',
-    'tail_mac',
-    'tail_aerodynamic_centre',
-    'tail_lift_share',
-    'lift_slope',
-    'body_moment_slope',
-    'neutral_point_height',
-    'mac_leading_edge',
-  ],
-  writes: [
-    'neutral_point_wing',
-    'neutral_point_tail',
-    'neutral_point_body',
-    'neutral_point',
-    'neutral_point_station',
-  ],
-  cost: 15,
-  kernel: (
-    count,
-    [centre, arm, mac, tailMac, tailCentre, share, whole, bodySlope, byHeight, leadingEdge],
-    [byWing, byTail, byBody, point, station],
-  ) => {
-    for (let row = 0; row < count; row++) {
-      const ht = tailPosition(arm[row], mac[row], tailMac[row], tailCentre[row]);
-      const tail = tailStep(centre[row], ht, share[row], whole[row]);
-      // + 0: without a body the step is 0, not −0.
-      const body = bodyStep(bodySlope[row], whole[row]) + 0;
-      const hn = neutralPoint(centre[row], tail, body, byHeight[row]);
-      byWing[row] = centre[row];
-      byTail[row] = tail;
-      byBody[row] = body;
-      point[row] = hn;
-      station[row] = leadingEdge[row] + hn * mac[row];
-    }
-  },
-};
+/** Where the lift of the tail acts; the steps of wing, tail and body, and their sum. */
+export function stepsStage({ propeller }: Pick<Study, 'propeller'>): Stage {
+  return {
+    name: 'steps of the neutral point',
+    reads: [
+      'wing_aerodynamic_centre',
+      'tail_arm',
+      'mac',
+      'tail_mac',
+      'tail_aerodynamic_centre',
+      'tail_lift_share',
+      propeller === undefined ? 'lift_slope' : 'lift_slope_rest',
+      'body_moment_slope',
+    ],
+    writes: [
+      'tail_position',
+      'neutral_point_wing',
+      'neutral_point_tail',
+      'neutral_point_body',
+      'neutral_point_rest',
+    ],
+    cost: 15,
+    kernel: (
+      count,
+      [centre, arm, mac, tailMac, tailCentre, share, whole, bodySlope],
+      [position, byWing, byTail, byBody, sum],
+    ) => {
+      for (let row = 0; row < count; row++) {
+        const ht = tailPosition(arm[row], mac[row], tailMac[row], tailCentre[row]);
+        const tail = tailStep(centre[row], ht, share[row], whole[row]);
+        // + 0: without a body the step is 0, not −0.
+        const body = bodyStep(bodySlope[row], whole[row]) + 0;
+        position[row] = ht;
+        byWing[row] = centre[row];
+        byTail[row] = tail;
+        byBody[row] = body;
+        sum[row] = neutralPoint(centre[row], tail, body, 0);
+      }
+    },
+  };
+}
+
+/** The neutral point: the steps so far, and those of propeller, height and a measured correction. */
+export function neutralPointStage({
+  propeller,
+  corrections,
+}: Pick<Study, 'propeller' | 'corrections'>): Stage {
+  const correction = corrections?.neutralPoint ?? 0;
+  return {
+    name: 'neutral point',
+    reads: [
+      'neutral_point_rest',
+      'neutral_point_height',
+      'mac_leading_edge',
+      'mac',
+      ...(propeller === undefined ? [] : ['neutral_point_propeller']),
+    ],
+    writes: [
+      'neutral_point',
+      'neutral_point_station',
+      ...(corrections === undefined ? [] : ['neutral_point_correction']),
+    ],
+    cost: 5,
+    kernel: (count, [rest, byHeight, leadingEdge, mac, byPropeller], [point, station, byCorrection]) => {
+      for (let row = 0; row < count; row++) {
+        const powered = byPropeller === undefined ? 0 : byPropeller[row];
+        const hn = rest[row] + powered + byHeight[row] + correction;
+        point[row] = hn;
+        station[row] = leadingEdge[row] + hn * mac[row];
+        if (byCorrection !== undefined) byCorrection[row] = correction;
+      }
+    },
+  };
+}

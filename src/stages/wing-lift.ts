@@ -8,8 +8,11 @@ type MethodsStudy = Pick<Study, 'methods'>;
 
 const quarterChord = 0.25;
 
-/** Lift-curve slope of the wing, alone and with the body's carry-over. */
-export function wingLiftStage({ methods }: MethodsStudy): Stage {
+/**
+ * Lift-curve slope of the wing alone.
+ * @param figure written: `wing_lift_slope`, or `wing_lift_slope_away` where the ground changes it afterwards
+ */
+export function wingLiftStage({ methods }: MethodsStudy, figure = 'wing_lift_slope'): Stage {
   const slope = liftSlopeBy[methods.lift_slope];
   return {
     name: 'wing lift slope',
@@ -21,7 +24,7 @@ export function wingLiftStage({ methods }: MethodsStudy): Stage {
       'wing_section_lift_slope',
       'mach',
     ],
-    writes: ['wing_lift_slope'],
+    writes: [figure],
     cost: 80,
     kernel: (count, [A, taper, sweep, sweepHalf, a0, mach], [a]) => {
       for (let row = 0; row < count; row++) {

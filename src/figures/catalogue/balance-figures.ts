@@ -1,6 +1,6 @@
 import { entry, sources } from './entry.ts';
 
-const { definition, shares } = sources;
+const { exact, definition, shares, study } = sources;
 
 /** Body moment, neutral point and its build-up, CG, margins and the CG window. */
 export const balanceFigures = {
@@ -32,6 +32,49 @@ export const balanceFigures = {
     'C_mα,b = (π/2)(I_f + (1−ε_α) I_a)/(S c), or K_f w² L/(S c)',
     'Multhopp, NACA TM 1036; quick estimate Gilruth and White, NACA TR 711, from memory',
   ),
+  thrust_coefficient: entry(
+    'T_c',
+    'ratio',
+    'Thrust coefficient on the propeller’s diameter; at idle a windmilling drag of −0.02.',
+    'T_c = η_p P/(ρ V³ D²)',
+    'definition; idle a choice of ours',
+  ),
+  thrust_on_wing: entry('C_T', 'ratio', 'Thrust coefficient on the wing’s area.', 'C_T = 2 T_c D²/S', exact),
+  propeller_inflow: entry(
+    'a_p',
+    'ratio',
+    'Inflow factor of the propeller’s disc.',
+    'a_p = ½(√(1 + 8T_c/π) − 1)',
+    'momentum theory, exact for the ideal disc',
+  ),
+  propeller_normal_slope: entry(
+    'C_Nα',
+    'per_angle',
+    'Normal-force slope of the propeller on its disc.',
+    'C_Nα = f(a_p) k_s a_8 S_side/S_disc',
+    'Ribner, NACA TR 819 and 820, from memory',
+  ),
+  propeller_stream_gradient: entry(
+    'dα_p/dα',
+    'ratio',
+    'How the stream at the propeller turns with the angle of attack.',
+    '1 + u ahead of the wing (tractor), 1 − ε_α behind it (pusher)',
+    'upwash ours',
+  ),
+  tail_pressure_ratio: entry(
+    'η_t',
+    'ratio',
+    'Dynamic-pressure ratio at the tail, slipstream included.',
+    'η_t = η (1 − f + f (1 + 8T_c/π))',
+    'momentum theory; ours',
+  ),
+  tail_downwash_gradient: entry(
+    'ε_α,t',
+    'ratio',
+    'Downwash gradient at the tail, slipstream and ground included.',
+    'ε_α,t = ε_α g + ε_pα f r/(1 − f + f r), r = 1 + 8T_c/π, g the ground’s factor',
+    'momentum theory, ours; ground: handbook form, from memory',
+  ),
   tail_lift_share: entry(
     'a_s,t',
     'per_angle',
@@ -39,12 +82,40 @@ export const balanceFigures = {
     'a_s,t = η a_t (S_t/S)(1−ε_α)',
     shares,
   ),
+  lift_slope_rest: entry(
+    'C_Lα,r',
+    'per_angle',
+    'Lift-curve slope of all but the propeller.',
+    'C_Lα,r = a_wb + a_s,t',
+    shares,
+  ),
+  propeller_lift_share: entry(
+    'a_s,p',
+    'per_angle',
+    'Share of the propeller in the lift-curve slope of the whole.',
+    'a_s,p = C_Nα (S_disc/S) dα_p/dα',
+    shares,
+  ),
+  propeller_position: entry(
+    'h_p',
+    'fraction_of_mac',
+    'Place of the propeller disc.',
+    'h_p = (x_p − x_c)/c',
+    definition,
+  ),
   lift_slope: entry(
     'C_Lα',
     'per_angle',
     'Lift-curve slope of the whole aeroplane.',
     'C_Lα = a_wb + a_s,t',
     shares,
+  ),
+  tail_position: entry(
+    'h_t',
+    'fraction_of_mac',
+    'Place where the tail’s lift acts.',
+    'h_t = ¼ + l/c + (h_ac,t − ¼) c_t̄/c',
+    exact,
   ),
   neutral_point_wing: entry(
     'Δh_wing',
@@ -67,6 +138,27 @@ export const balanceFigures = {
     'Δh_body = −C_mα,b/C_Lα',
     shares,
   ),
+  neutral_point_rest: entry(
+    'h_n,r',
+    'fraction_of_mac',
+    'Neutral point by wing, tail and body.',
+    'h_n,r = Δh_wing + Δh_tail + Δh_body',
+    shares,
+  ),
+  neutral_point_propeller: entry(
+    'Δh_p',
+    'fraction_of_mac',
+    'Build-up of the neutral point: propeller.',
+    'Δh_p = a_s,p (h_p − h_n,r)/(C_Lα,r + a_s,p)',
+    shares,
+  ),
+  neutral_point_correction: entry(
+    'Δh_c',
+    'fraction_of_mac',
+    'Build-up of the neutral point: measured correction.',
+    'Δh_c as the study gives it',
+    study,
+  ),
   neutral_point_height: entry(
     'Δh_z',
     'fraction_of_mac',
@@ -77,8 +169,8 @@ export const balanceFigures = {
   neutral_point: entry(
     'h_n',
     'fraction_of_mac',
-    'Neutral point, stick fixed, power off, aft of the leading edge of the MAC.',
-    'h_n = Δh_wing + Δh_tail + Δh_body + Δh_z',
+    'Neutral point, stick fixed, at constant speed, aft of the leading edge of the MAC.',
+    'h_n = Δh_wing + Δh_tail + Δh_body (+ Δh_p) + Δh_z (+ Δh_c)',
     shares,
   ),
   neutral_point_station: entry(

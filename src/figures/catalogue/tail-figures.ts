@@ -106,4 +106,11 @@ export const tailFigures = {
     'ε_α = ε_α,T or ε_α,H, as the study’s methods say',
     study,
   ),
+  flap_downwash: entry(
+    'Δε_f',
+    'angle',
+    'Downwash at the tail that part-span flaps add over that of the same lift on the whole wing.',
+    'Δε_f = −ε_α (1/η_f − 1) Δα_f, or own increment',
+    'ours, a stated assumption',
+  ),
 } as const;
