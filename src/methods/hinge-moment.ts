@@ -50,7 +50,9 @@ export function sectionHingeSlopeByElevator(chordFraction: number, factor: numbe
 export function sectionHingeSlopeByTab(chordFraction: number, tabFraction: number, factor: number): number {
   const theta = Math.acos(2 * chordFraction - 1);
   const thetaTab = Math.acos(2 * tabFraction - 1);
-  const [cosine, cosineTab, sineTab] = [Math.cos(theta), Math.cos(thetaTab), Math.sin(thetaTab)];
+  const cosine = Math.cos(theta);
+  const cosineTab = Math.cos(thetaTab);
+  const sineTab = Math.sin(thetaTab);
   const incidence = ((Math.PI - thetaTab) / Math.PI) * plateIntegral(theta);
   // The tab's own load has a logarithm at its hinge; where the hinges meet it counts for nothing.
   const gap = cosine - cosineTab;

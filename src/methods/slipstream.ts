@@ -35,12 +35,13 @@ export function immersedFraction(
   if (!(squared > 0)) return 0;
   const halfWidth = Math.sqrt(squared);
   const semiSpan = tailSpan / 2;
-  // Areas are counted from the plane of symmetry, port side negative; half the tail on either side.
-  const upTo = (y: number) => {
-    const station = Math.min(Math.abs(y) / semiSpan, 1);
-    return (Math.sign(y) * areaFractionBetween(0, station, tailTaper)) / 2;
-  };
-  return upTo(offset + halfWidth) - upTo(offset - halfWidth);
+  const outer = areaFromCentre((offset + halfWidth) / semiSpan, tailTaper);
+  return outer - areaFromCentre((offset - halfWidth) / semiSpan, tailTaper);
+}
+
+/** Part of the tail's area from the plane of symmetry to a station over the semi-span [-], port negative, ±½ at most. */
+function areaFromCentre(station: number, taper: number): number {
+  return (Math.sign(station) * areaFractionBetween(0, Math.min(Math.abs(station), 1), taper)) / 2;
 }
 
 /**

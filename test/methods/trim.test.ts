@@ -352,4 +352,17 @@ describe('forward limits', () => {
       }),
     );
   });
+
+  it('seven tenths of the elevator’s effectiveness cost 0.06–0.23 MAC (ours)', () => {
+    // Flaps down, C_L 1.6–2.2, 25° up, C_Lδ 0.33–0.5 /rad.
+    for (const [lift, slope] of [
+      [2.2, 0.33],
+      [1.6, 0.33],
+      [1.8, 0.5],
+    ] as const) {
+      const at = (part: number) => forwardLimitByElevator(lift, -0.436, -0.02, 0.42, part * slope, 3.7);
+      expect(at(0.7) - at(1)).toBeGreaterThan(0.06);
+      expect(at(0.7) - at(1)).toBeLessThan(0.23);
+    }
+  });
 });
