@@ -66,6 +66,47 @@ export class StudyError extends Error {
   }
 }
 
+/** Codes of faults found in a table of flight-test data (exit 2). */
+export const dataFaultCodes = {
+  NOT_UTF8: 'a table that is not UTF-8 text',
+  UNREADABLE_CSV: 'quotes that do not match',
+  WRONG_SEPARATOR: 'cells that are not separated by commas',
+  NO_POINTS: 'a table without a flown point',
+  UNKNOWN_COLUMN: 'a column that flight-test data do not have',
+  DUPLICATE_COLUMN: 'one quantity in two columns',
+  MISSING_COLUMN: 'a column that is needed is not there',
+  WRONG_CELL_COUNT: 'a row with more or fewer cells than the header',
+  MISSING_CELL: 'an empty cell where a value is needed',
+  DECIMAL_COMMA: 'a decimal comma',
+  NOT_A_NUMBER: 'a text where a number is wanted',
+  OUT_OF_RANGE: 'a number outside what is physically possible',
+  DUPLICATE_POINT: 'one name for two points',
+} as const;
+export type DataFaultCode = keyof typeof dataFaultCodes;
+
+/** One fault in a table of data: where, what was found, what to do. Lines and columns count from 1. */
+export interface DataFault {
+  readonly code: DataFaultCode;
+  readonly line: number;
+  readonly column: number;
+  /** Length of the marked text on that line, at least 1. */
+  readonly length: number;
+  readonly found: string;
+  readonly remedy: string;
+}
+
+/** All the faults of one table at once. */
+export class DataError extends Error {
+  override readonly name = 'DataError';
+  constructor(
+    readonly file: string,
+    readonly text: string,
+    readonly faults: readonly DataFault[],
+  ) {
+    super(`${faults.length} fault${faults.length === 1 ? '' : 's'} in ${file}`);
+  }
+}
+
 /** Codes of other mistakes a user can make (exit 2). */
 export const usageFaultCodes = {
   BAD_ARGUMENT: 'an argument that cannot be used',

@@ -1,4 +1,4 @@
-import { exitCodes, MachineError, StudyError, UsageError } from '../errors.ts';
+import { DataError, exitCodes, MachineError, StudyError, UsageError } from '../errors.ts';
 
 /** A mistake in the arguments, as found by the argument parser. */
 export function usageFailure(message: string): UsageError {
@@ -16,7 +16,7 @@ export function colourAllowed(): boolean {
 
 /** Tells the user what went wrong on standard error. @returns the exit code */
 export async function tellFailure(error: unknown): Promise<number> {
-  if (error instanceof StudyError) {
+  if (error instanceof StudyError || error instanceof DataError) {
     const { formatStudyError } = await import('../study/format-study-error.ts');
     process.stderr.write(`${formatStudyError(error, { color: colourAllowed() })}\n`);
   } else if (error instanceof UsageError || error instanceof MachineError) {
@@ -36,7 +36,9 @@ export function tellFailureAsLine(error: unknown): number {
 }
 
 function failureFields(error: unknown): object {
-  if (error instanceof StudyError) return { message: error.message, file: error.file, faults: error.faults };
+  if (error instanceof StudyError || error instanceof DataError) {
+    return { message: error.message, file: error.file, faults: error.faults };
+  }
   if (error instanceof UsageError || error instanceof MachineError) {
     return { code: error.code, message: error.message, remedy: error.remedy };
   }
@@ -44,7 +46,8 @@ function failureFields(error: unknown): object {
 }
 
 function exitCodeOf(error: unknown): number {
-  if (error instanceof StudyError || error instanceof UsageError) return exitCodes.user;
+  const isUsers = error instanceof StudyError || error instanceof DataError || error instanceof UsageError;
+  if (isUsers) return exitCodes.user;
   return error instanceof MachineError ? exitCodes.machine : exitCodes.bug;
 }
 

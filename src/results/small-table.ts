@@ -57,15 +57,27 @@ export interface SmallTable {
 
 /** Reads a CSV table; texts come back as they were before they were neutralised. */
 export async function readSmallTable(path: string): Promise<SmallTable> {
-  let text: string;
+  const [header = [], ...rows] = await parseTable(new TextDecoder().decode(readTableBytes(path)));
+  return { header, rows };
+}
+
+/** Bytes of a table's file. Throws UsageError when it is not there. */
+export function readTableBytes(path: string): Uint8Array {
   try {
-    text = readFileSync(path, 'utf8');
+    return readFileSync(path);
   } catch (error) {
-    if (error instanceof Error && 'code' in error && error.code === 'ENOENT') {
-      throw new UsageError('NO_SUCH_FILE', `${path} is not there.`, 'Check the name.');
-    }
-    throw readFault(error, path);
+    const code = error instanceof Error && 'code' in error ? error.code : undefined;
+    if (code !== 'ENOENT' && code !== 'EISDIR') throw readFault(error, path);
+    const why = code === 'ENOENT' ? 'is not there' : 'is a folder';
+    throw new UsageError('NO_SUCH_FILE', `${path} ${why}.`, 'Check the name.');
   }
+}
+
+/**
+ * Rows of a CSV text, an empty line being a row without cells. Rejects with fast-csv's own error where
+ * quotes do not match.
+ */
+export async function parseTable(text: string): Promise<string[][]> {
   const rows: string[][] = [];
   await new Promise<void>((resolve, reject) => {
     parseString<string[], string[]>(text)
@@ -73,6 +85,5 @@ export async function readSmallTable(path: string): Promise<SmallTable> {
       .on('error', reject)
       .on('end', () => resolve());
   });
-  const [header = [], ...body] = rows;
-  return { header, rows: body };
+  return rows;
 }

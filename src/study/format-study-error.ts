@@ -1,5 +1,7 @@
-/** A StudyError as text: code, place, what was found, the line itself, what to do. */
-import type { StudyError, StudyFault } from '../errors.ts';
+/** Faults of a study or a table as text: code, place, what was found, the line itself, what to do. */
+import type { DataError, DataFault, StudyError, StudyFault } from '../errors.ts';
+
+type Fault = StudyFault | DataFault;
 
 export interface FormatOptions {
   readonly color: boolean;
@@ -16,8 +18,8 @@ const paint = (text: string, code: number, color: boolean) =>
 const bold = 1;
 const red = 31;
 
-/** All faults of a study in the order of its text, ready to print; ends in a line break. */
-export function formatStudyError(error: StudyError, { color }: FormatOptions): string {
+/** All faults of a study or a table in the order of its text, ready to print; ends in a line break. */
+export function formatStudyError(error: StudyError | DataError, { color }: FormatOptions): string {
   const lines = error.text.split('\n');
   const shown = error.faults.slice(0, mostShown).map((fault) => formatFault(error.file, lines, fault, color));
   const rest = error.faults.length - shown.length;
@@ -25,7 +27,7 @@ export function formatStudyError(error: StudyError, { color }: FormatOptions): s
   return [...shown, ...tail].join('\n');
 }
 
-function formatFault(file: string, lines: readonly string[], fault: StudyFault, color: boolean): string {
+function formatFault(file: string, lines: readonly string[], fault: Fault, color: boolean): string {
   const { code, line, column, found, remedy } = fault;
   const place = `${printable(file)}:${line}:${column}`;
   const excerpt = lines[line - 1] === undefined ? [] : markedLine(lines[line - 1]!, fault, color);
@@ -38,7 +40,7 @@ function formatFault(file: string, lines: readonly string[], fault: StudyFault, 
   ].join('\n');
 }
 
-function markedLine(text: string, { line, column, length }: StudyFault, color: boolean): string[] {
+function markedLine(text: string, { line, column, length }: Fault, color: boolean): string[] {
   const whole = printable(text.replace(/\r$/, ''));
   const { cut, shift } = window(whole, column - 1, length);
   const margin = `${String(line).padStart(numberWidth)} | `;
