@@ -105,7 +105,7 @@ function sizeDependants(path: string, choices: Choices): Dependants {
 function cgWords({ cg, loading }: Choices): string[] {
   if (loading) {
     const carriers = new Set(loading.items.map((item) => item.carriedBy).filter((by) => by !== 'station'));
-    const riding = carriers.size > 0 ? `; what ${[...carriers].join(' and ')} carry moves with them` : '';
+    const riding = carriers.size > 0 ? ` (items carried by ${[...carriers].join(' and ')} ride along)` : '';
     return [`the masses and stations of the loading${riding}`];
   }
   const words = (end: string, kind: CgKind) => {

@@ -23,7 +23,15 @@ export const loadingRows: Row[] = [
     20,
     datum,
   ],
-  ['loading.items[n].mass', 'm_[n]', 'mass', 'Mass of item [n].', 0, 50_000, massLimits],
+  [
+    'loading.items[n].mass',
+    'm_[n]',
+    'mass',
+    'Mass of item [n].',
+    0,
+    50_000,
+    'nothing aboard to a large twin',
+  ],
   ['loading.items[n].station', 'x_m[n]', 'length', 'Station of item [n].', -100, 160, datum],
   [
     'loading.items[n].at',

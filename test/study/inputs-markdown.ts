@@ -15,6 +15,9 @@ const units: Partial<Record<InputDefinition['dimension'], string>> = {
   mass: 'kg',
   speed: 'm/s',
   per_angle: '/rad',
+  force: 'N',
+  power: 'W',
+  per_length: 'rad/m',
 };
 
 function row(entry: InputDefinition): string {

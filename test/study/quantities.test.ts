@@ -42,6 +42,15 @@ describe('units', () => {
     ['0.1 /deg', 'per_angle', 18 / Math.PI],
     ['0.1 per deg', 'per_angle', 18 / Math.PI],
     ['10 lbf', 'force', 10 * 0.45359237 * 9.80665],
+    // the mechanical horsepower, 550 foot-pounds a second, is 745.699872 W to nine digits (NIST SP 811, from memory)
+    ['73 kW', 'power', 73_000],
+    ['100 hp', 'power', 55_000 * 0.3048 * 0.45359237 * 9.80665],
+    ['120 N*m', 'moment', 120],
+    ['10 lbf*ft', 'moment', 3.048 * 0.45359237 * 9.80665],
+    ['1.9 rad/m', 'per_length', 1.9],
+    ['9 deg/cm', 'per_length', 5 * Math.PI],
+    ['2.54 deg/in', 'per_length', (100 * Math.PI) / 180],
+    ['1.852 N/kt', 'force_per_speed', 3.6],
     ['24 %', 'fraction_of_mac', 0.24],
     ['0.24', 'fraction_of_mac', 0.24],
     ['95%', 'ratio', 0.95],
@@ -50,6 +59,10 @@ describe('units', () => {
     ['.5', 'ratio', 0.5],
   ])('%s is %s %d', (text, dimension, value) => {
     expect(si(text, dimension)).toBeCloseTo(value, 12);
+  });
+
+  test('a horsepower has its published number of watts', () => {
+    expect(si('1 hp', 'power')).toBeCloseTo(745.699872, 6);
   });
 
   test('a unit that divides the SI unit gives the nearest double', () => {
