@@ -142,8 +142,11 @@ function trimPanel(
   const left = [
     ...limits.filter((_, index) => names[index] === null).map(({ label }) => label),
     ...data.curves
-      .filter((_, index) => numbers[index] === null)
-      .map(({ label, cg }) => `${cleanText(label)} ${numberText(cg, 1)} %`),
+      .map(({ label, cg }, index) => {
+        const said = `${cleanText(label)} ${numberText(cg, 1)} %`;
+        return curves[index]!.lines.length === 0 ? `${said}: no trim within this plot` : said;
+      })
+      .filter((_, index) => numbers[index] === null),
   ];
   return panel({
     ...plot,

@@ -37,7 +37,7 @@ export function flightTestSlopes(data: FlightTestSlopesData): ChartSpec {
     [grid(panels, 2), keyRow([...measuredKey, ...slopeKey(data)], width)],
     [
       neutralPointInWords(data),
-      'It is extrapolated, never flown to: approach the aft limit in small steps, under qualified supervision',
+      'A neutral point is extrapolated, never flown to: approach the aft limit in small steps, under qualified supervision',
     ],
   );
 }

@@ -9,12 +9,8 @@ export {
 export type { FlightTestSlopesData, FlownCg, StraightLine } from './flight-test-data.ts';
 export { flightTestSlopes } from './flight-test-slopes.ts';
 export type { MassPoint } from './geometry/burn-path.ts';
-export {
-  type LoadingCase,
-  type LoadingDiagramData,
-  type LoadingLimit,
-  loadingDiagram,
-} from './loading-diagram.ts';
+export type { LoadingCase, LoadingDiagramData, LoadingLimit } from './loading-data.ts';
+export { loadingDiagram } from './loading-diagram.ts';
 export { macRuler } from './mac-ruler.ts';
 export type { MacRulerData, MacRulerRow } from './mac-ruler-data.ts';
 export {

@@ -4,8 +4,10 @@ import { clipToFrame } from './geometry/clip.ts';
 import { type MarkedPoint, placeBeside } from './geometry/point-labels.ts';
 import { type Point, type Spot, spotsAlong } from './geometry/polyline.ts';
 import { type KeyItem, keyRow } from './key-row.ts';
-import { type Layer, labels, points, polygons, polylines, segments } from './marks.ts';
+import type { LoadingDiagramData } from './loading-data.ts';
+import { type Layer, labels, points, polygons, polylines } from './marks.ts';
 import {
+  cgAbsent,
   cgAcross,
   cgSide,
   limitKey,
@@ -17,40 +19,11 @@ import {
   placeNames,
   placeTags,
 } from './named-lines.ts';
-import { niceValues } from './nice-steps.ts';
 import { type PixelMap, panel, pixelMap, type Scale } from './panel.ts';
-import { type ChartHeading, type ChartSpec, sheet } from './sheet.ts';
+import { type ChartSpec, sheet } from './sheet.ts';
+import { stationAxis } from './station-axis.ts';
 import { cleanText, ellipsize, numberText } from './text-width.ts';
 import { colours, textSize, weight } from './theme.ts';
-
-/** One loading case: its states from the fullest to the emptiest. */
-export interface LoadingCase {
-  readonly label: string;
-  /** States at every break of the burn sequence, in that order; one state when nothing burns. CG in % MAC, mass in the unit of the mass title. */
-  readonly states: readonly MassPoint[];
-}
-
-/** A limit of the CG against mass. */
-export interface LoadingLimit {
-  /** `control limit: elevator travel at the stall`, `aft limit: margin at least 5 %` */
-  readonly label: string;
-  readonly forbidden: 'forward' | 'aft';
-  /** Points of the line, CG [% MAC]; a single one means the same CG at every mass. */
-  readonly line: readonly MassPoint[];
-}
-
-export interface LoadingDiagramData {
-  readonly heading: ChartHeading;
-  /** With unit: `Mass [kg]`. */
-  readonly massTitle: string;
-  /** The second scale, along the top. `leadingEdge` (of the MAC) and `chord` (the MAC) in the unit of its title. */
-  readonly station: { readonly title: string; readonly leadingEdge: number; readonly chord: number };
-  readonly cases: readonly LoadingCase[];
-  readonly limits: readonly LoadingLimit[];
-  /** In the unit of the mass title. */
-  readonly greatestMass?: number;
-  readonly empty: MassPoint;
-}
 
 const plot = { width: 640, height: 440 } as const;
 const arrowLength = 9;
@@ -86,7 +59,7 @@ export function loadingDiagram(data: LoadingDiagramData): ChartSpec {
     nameLabels(tags, map),
     ...pathLayers(data, paths, map),
     labels(caseNames.labels, { size: textSize.small, weight: weight.strong }),
-    ...stationAxis(data.station, scales),
+    ...stationAxis(data.station, scales, plot),
   ];
   const unnamed = limits.flatMap((limit, index) =>
     limitNames[index] === null ? [limitKey(limit, tags[index]!)] : [],
@@ -181,7 +154,17 @@ function limitLines(
           ]
         : [...line].sort((a, b) => a.mass - b.mass);
     const pixels = whole.map((point) => pixelOf(point, map));
-    return { label, lines: clipToFrame(pixels, plot), style: limitStyle(index), side: cgSide(forbidden) };
+    return {
+      label,
+      lines: clipToFrame(pixels, plot),
+      style: limitStyle(index),
+      side: cgSide(forbidden),
+      absent: cgAbsent(
+        line.map(({ cg }) => cg),
+        forbidden,
+        x,
+      ),
+    };
   });
   if (greatestMass === undefined) return ofCg;
   const ends = [x.from, x.to].map((cg) => pixelOf({ cg, mass: greatestMass }, map));
@@ -285,36 +268,4 @@ function inWords(label: string, full: MassPoint, burnt: MassPoint): KeyItem {
   const state = ({ mass, cg }: MassPoint) => `${massText(mass)} at ${numberText(cg, 1)} %`;
   const way = full === burnt ? state(full) : `${state(full)} to ${state(burnt)}`;
   return { symbol: { kind: 'line', style: pathLine }, text: `${cleanText(label)}: ${way}` };
-}
-
-const stationTicks = 8;
-const stationTick = 4;
-/** The station scale along the top, drawn over the % MAC scale that the plot runs on. */
-function stationAxis(
-  { title, leadingEdge, chord }: LoadingDiagramData['station'],
-  { x, y }: { readonly x: Scale; readonly y: Scale },
-): Layer[] {
-  const stationOf = (cg: number) => leadingEdge + (cg / 100) * chord;
-  const { values, decimals } = niceValues(stationOf(x.from), stationOf(x.to), stationTicks);
-  const ticks = values.map((station) => ({
-    x: ((station - leadingEdge) / chord) * 100,
-    text: numberText(station, decimals),
-  }));
-  const top = y.to + ((y.to - y.from) * stationTick) / plot.height;
-  const label = ellipsize(title, plot.width, textSize.axis);
-  return [
-    segments(
-      ticks.map((tick) => ({ x: tick.x, x2: tick.x, y: y.to, y2: top })),
-      { color: colours.rule, width: 1 },
-    ),
-    labels(
-      ticks.map((tick) => ({ ...tick, y: y.to })),
-      { size: textSize.axis, color: colours.muted, baseline: 'bottom', dy: -7 },
-    ),
-    labels([{ x: (x.from + x.to) / 2, y: y.to, text: label }], {
-      size: textSize.axis,
-      baseline: 'bottom',
-      dy: -25,
-    }),
-  ];
 }

@@ -15,6 +15,8 @@ export interface NamedLine {
   readonly style: LineStyle;
   /** +1 when the given unit normal of the line points to the forbidden side, −1 when against it; absent: no hatch. */
   readonly side?: (normal: Point) => 1 | -1;
+  /** What the key says of a line no part of which is in the plot. */
+  readonly absent?: string;
   /** Where along the line its name would best stand: 0 at the start, 1 at the end. */
   readonly best?: number;
 }
@@ -51,6 +53,18 @@ export function limitStyle(index: number): LineStyle {
 /** The forbidden side of a limit of the CG, in a plot with forward at the left. */
 export function cgSide(forbidden: 'forward' | 'aft'): (normal: Point) => 1 | -1 {
   return (normal) => (normal.x > 0 === (forbidden === 'aft') ? 1 : -1);
+}
+
+/** What a limit of the CG does to a plot that it does not cross. */
+export function cgAbsent(
+  cgs: readonly number[],
+  forbidden: 'forward' | 'aft',
+  { from, to }: { readonly from: number; readonly to: number },
+): string {
+  if (cgs.every(Number.isNaN)) return 'not known';
+  const [ahead, behind] = [cgs.every((cg) => cg < from), cgs.every((cg) => cg > to)];
+  if (!ahead && !behind) return 'not in this plot';
+  return ahead === (forbidden === 'forward') ? 'forbids nothing in this plot' : 'forbids all of this plot';
 }
 
 /** Room that a line and its hatch take. */
@@ -138,8 +152,11 @@ export function namedLineLayers(
 }
 
 /** Key of a line whose name found no room on it, with its letter if that did. */
-export function limitKey({ label, lines, style, side }: NamedLine, tag: LineLabel | null): KeyItem {
-  if (lines.length === 0) return { symbol: { kind: 'none' }, text: `${cleanText(label)}: not in this plot` };
+export function limitKey(
+  { label, lines, style, side, absent = 'not in this plot' }: NamedLine,
+  tag: LineLabel | null,
+): KeyItem {
+  if (lines.length === 0) return { symbol: { kind: 'none' }, text: `${cleanText(label)}: ${absent}` };
   return tag === null
     ? { symbol: { kind: 'line', style, ticks: side !== undefined }, text: label }
     : { symbol: { kind: 'letter', letter: tag.text, style }, text: label };

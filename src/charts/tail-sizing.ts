@@ -3,6 +3,7 @@ import { type Spot, spotsAlong } from './geometry/polyline.ts';
 import { type KeyItem, keyRow } from './key-row.ts';
 import { bars, type Layer, points, segments } from './marks.ts';
 import {
+  cgAbsent,
   cgAcross,
   cgSide,
   limitKey,
@@ -64,7 +65,7 @@ export function tailSizing(data: TailSizingData): ChartSpec {
     ...(fit === null ? [] : rangeSpots(data, fit, map)),
     ...(data.baseline === undefined ? [] : rangeSpots(data, data.baseline, map)),
   ];
-  const limits = data.limits.map((limit, index) => limitLine(limit, index, data.sizes, map));
+  const limits = data.limits.map((limit, index) => limitLine(limit, index, data.sizes, scales.x, map));
   const names = placeNames(limits, clear, plot);
   const tags = placeTags(limits, names, clear, plot);
   const texts = [...names, ...tags].flatMap((text) => text?.spots ?? []);
@@ -153,10 +154,17 @@ function limitLine(
   { label, cg, forbidden }: CgLimit,
   index: number,
   sizes: readonly number[],
+  x: Scale,
   map: PixelMap,
 ): NamedLine {
   const line = sizes.map((size, k) => map.toPixels({ x: cg[k]!, y: size }));
-  return { label, lines: clipToFrame(line, plot), style: limitStyle(index), side: cgSide(forbidden) };
+  return {
+    label,
+    lines: clipToFrame(line, plot),
+    style: limitStyle(index),
+    side: cgSide(forbidden),
+    absent: cgAbsent(Array.from(cg), forbidden, x),
+  };
 }
 
 const rangeRoom = 20;
