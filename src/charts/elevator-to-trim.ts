@@ -207,5 +207,5 @@ function speedLimits({ stallSpeed, greatestSpeed }: TrimPanel, y: Scale, map: Pi
             best: 0.28,
           },
         ];
-  return [...upright(stallSpeed, 'stall'), ...upright(greatestSpeed, 'greatest speed')];
+  return [...upright(stallSpeed, 'stall'), ...upright(greatestSpeed, 'greatest')];
 }
