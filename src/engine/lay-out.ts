@@ -56,6 +56,9 @@ const alwaysKept = [
 /** Figures of which the table has a column for each of several conditions; all others are in the worksheet. */
 const tabledPerCondition = ['neutral_point', 'static_margin_forward', 'static_margin_aft'];
 
+/** Figures that are columns only where a loading works them out, not as a fixed number of the study. */
+const ofLoading: readonly string[] = ['mass', 'cg_above_datum'];
+
 function ofConditions({ conditions }: Study): string[] {
   if (conditions.length === 1) return [];
   return tabledPerCondition.flatMap((name) =>
@@ -66,7 +69,11 @@ function ofConditions({ conditions }: Study): string[] {
 /** The varied numbers in the author's order, then every result in the order of computation. */
 function tableFigureNames(study: Study, plan: Plan): string[] {
   const varied = plan.authorOrder.flatMap((position) => plan.axes[position].figures);
-  const results = figureNames.filter((name) => name !== combinationFigure && !isWorksheetOnly(name));
+  const isColumn = (name: string) =>
+    name !== combinationFigure &&
+    !isWorksheetOnly(name) &&
+    !(ofLoading.includes(name) && plan.fixed.has(name));
+  const results = figureNames.filter(isColumn);
   const workedOut = (name: string) => name === combinationFigure || plan.axesOfFigure.has(name);
   const all = [...new Set([combinationFigure, ...varied, ...results, ...ofConditions(study)])].filter(
     workedOut,

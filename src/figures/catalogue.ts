@@ -1,5 +1,6 @@
 import { balanceFigures } from './catalogue/balance-figures.ts';
 import { type Entry, entry, sources } from './catalogue/entry.ts';
+import { loadingFigures } from './catalogue/loading-figures.ts';
 import { tailFigures } from './catalogue/tail-figures.ts';
 import { verdictFigures } from './catalogue/verdict-figures.ts';
 import { wingFigures } from './catalogue/wing-figures.ts';
@@ -20,6 +21,7 @@ const entries = {
   ),
   ...wingFigures,
   ...tailFigures,
+  ...loadingFigures,
   ...balanceFigures,
   ...verdictFigures,
 } as const satisfies Record<string, Entry>;

@@ -28,8 +28,21 @@ function chosenWording(study: Study): Partial<Record<FigureName, Wording>> {
     },
     downwash_gradient: { formula: methods.downwash === 'torenbeek' ? 'ε_α = ε_α,T' : 'ε_α = ε_α,H' },
     body_moment_slope: bodyWording(study),
+    ...(study.loading === undefined ? {} : loadedWording),
   };
 }
+
+/** Ends of a CG range that follows from masses. */
+const loadedWording: Partial<Record<FigureName, Wording>> = {
+  cg_forward_station: {
+    formula: 'x_fwd = min of Σ m x/Σ m over all loading cases and every break of what burns in them',
+    source: 'exact',
+  },
+  cg_aft_station: {
+    formula: 'x_aft = max of Σ m x/Σ m over all loading cases and every break of what burns in them',
+    source: 'exact',
+  },
+};
 
 function bodyWording(study: Study): Wording {
   if (study.body === undefined)
@@ -55,7 +68,7 @@ export interface StudyLabels {
   readonly conditions: readonly string[];
 }
 
-function labelsOf(name: FigureName, labels: StudyLabels): readonly string[] | undefined {
+function labelsOf(name: FigureName, labels: StudyLabels, { loading }: Study): readonly string[] | undefined {
   switch (name) {
     case 'fails':
     case 'fails_first':
@@ -68,6 +81,9 @@ function labelsOf(name: FigureName, labels: StudyLabels): readonly string[] | un
     case 'governing_condition_aft':
     case 'governing_condition_forward':
       return labels.conditions;
+    case 'cg_forward_case':
+    case 'cg_aft_case':
+      return loading?.cases.map((one) => one.name);
     default:
       return undefined;
   }
@@ -87,7 +103,7 @@ export function figuresOfStudy(study: Study, labels: StudyLabels): Map<string, F
   const wording = chosenWording(study);
   for (const name of figureNames) {
     if (figures.has(name)) continue;
-    const figure = { ...catalogueFigure(name, labelsOf(name, labels)), ...wording[name] };
+    const figure = { ...catalogueFigure(name, labelsOf(name, labels, study)), ...wording[name] };
     for (const own of figuresOfConditions(figure, study)) figures.set(own.name, own);
     figures.set(name, figure);
   }

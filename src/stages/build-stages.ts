@@ -8,6 +8,7 @@ import { angleOfAttackStage, downwashStage, machRatioStage } from './downwash.ts
 import { flapDownwashStages, flapStages } from './flaps.ts';
 import { governingStages } from './governing.ts';
 import { groundLiftStage } from './ground-effect.ts';
+import { loadingStages } from './loading.ts';
 import { loadingRangeStages, marginsStage, windowStage } from './loading-range.ts';
 import { heightStage, neutralPointStage, sharesStage, stepsStage } from './neutral-point.ts';
 import { rangeStages, reasonStage } from './out-of-range.ts';
@@ -43,6 +44,7 @@ export function buildStages(study: Study): Stage[] {
     tailCentreStage(study),
     elevatorStage(study),
     ...bodyShapeStages(study, places),
+    ...loadingStages(study, places),
     ...loadingRangeStages(study),
     ...ofConditions.stages,
     ...governingStages(study, ofConditions.common),
