@@ -5,6 +5,7 @@ import { StudyError } from '../../src/errors.ts';
 import { formatStudyError } from '../../src/study/format-study-error.ts';
 import { starterStudy } from '../../src/study/starters.ts';
 import { baseStudy, edited, errorOf, read, varying } from './base-study.ts';
+import { wholeStudy } from './whole-study.ts';
 
 test.each([
   ['a list in flow', `a: ${'['.repeat(10_000)}${']'.repeat(10_000)}`],
@@ -127,7 +128,13 @@ const edits = fc.array(
 );
 
 test('a study damaged anywhere gives a study or faults with a place inside its text', () => {
-  const good = [baseStudy, starterStudy('tourer'), starterStudy('sailplane'), starterStudy('uncrewed')];
+  const good = [
+    baseStudy,
+    wholeStudy,
+    starterStudy('tourer'),
+    starterStudy('sailplane'),
+    starterStudy('uncrewed'),
+  ];
   fc.assert(
     fc.property(fc.constantFrom(...good), edits, (study, changes) => {
       let text = study;
@@ -154,23 +161,35 @@ test('a study damaged anywhere gives a study or faults with a place inside its t
   );
 }, 120_000);
 
-test('a value exchanged for any other gives a study or faults', () => {
-  const lines = baseStudy.split('\n');
-  const values = fc.oneof(
-    pieces,
-    fc.constantFrom('[1, 2]', '{a: 1}', '[[1]]', '[{a: 1 m}]', '5 kg', '5 m', '5 %', '5 deg', '""', ''),
-  );
-  fc.assert(
-    fc.property(fc.integer({ min: 0, max: lines.length - 1 }), values, (index, value) => {
-      const text = lines
-        .map((line, i) => (i === index ? line.replace(/:.*$/, () => `: ${value}`) : line))
-        .join('\n');
-      try {
-        read(text);
-      } catch (error) {
-        if (!(error instanceof StudyError)) throw error;
-      }
-    }),
-    { numRuns: 400 },
-  );
-}, 120_000);
+/** Texts with any one value exchanged, in blocks and inside braces. */
+const lineValue = /(?<=: ).*$/gm;
+const innerValue = /(?<=: )[^,{}[\]\n]+|(?<=\[)[^[\]{}\n]*(?=\])/g;
+
+test.each([
+  ['a plain study', baseStudy],
+  ['a whole study', wholeStudy],
+])(
+  '%s with a value exchanged for any other gives a study or faults',
+  (_, study) => {
+    const places = [...study.matchAll(lineValue), ...study.matchAll(innerValue)];
+    const values = fc.oneof(
+      pieces,
+      fc.constantFrom('[1, 2]', '{a: 1}', '[[1]]', '[{a: 1 m}]', '5 kg', '5 m', '5 %', '5 deg', '""', ''),
+    );
+    fc.assert(
+      fc.property(fc.integer({ min: 0, max: places.length - 1 }), values, (index, value) => {
+        const { 0: old, index: start } = places[index]!;
+        const text = study.slice(0, start) + value + study.slice(start + old.length);
+        try {
+          read(text);
+        } catch (error) {
+          if (!(error instanceof StudyError)) throw error;
+          for (const { found, remedy } of error.faults)
+            expect(`${found} ${remedy}`).not.toMatch(/undefined|NaN|\[object|Invalid input/);
+        }
+      }),
+      { numRuns: 400 },
+    );
+  },
+  120_000,
+);
