@@ -1,7 +1,13 @@
 #!/usr/bin/env node
 /** Arguments and exit codes, nothing else. Every command is loaded only when it is called. */
 import type { Argv } from 'yargs';
-import { flag, numberOption, repeatedTextOption, textOption } from './commands/arguments.ts';
+import {
+  flag,
+  neededTextOption,
+  numberOption,
+  repeatedTextOption,
+  textOption,
+} from './commands/arguments.ts';
 import { complete } from './commands/complete.ts';
 import { tellFailure, usageFailure } from './commands/failure.ts';
 import { hideBin, yargs } from './commands/yargs.ts';
@@ -84,6 +90,24 @@ function readingCommands(parser: Argv) {
     );
 }
 
+function flightTestCommand(parser: Argv) {
+  return parser.command(
+    'flight-test <data>',
+    'neutral point from measured elevator angles and stick forces, and the correction for a study',
+    (command) =>
+      command
+        .positional('data', { type: 'string', demandOption: true, describe: 'table of flown points (CSV)' })
+        .option('study', neededTextOption('study', 'study file or run folder of the flown aeroplane'))
+        .option(
+          'condition',
+          textOption('condition', 'flight condition of the prediction (default: the first)'),
+        )
+        .option('to', textOption('to', 'file for the report; it must not be there yet'))
+        .option('chart', textOption('chart', 'folder to draw the charts into')),
+    async (args) => (await import('./commands/flight-test.ts')).flightTest(args),
+  );
+}
+
 function referenceCommands(parser: Argv) {
   return parser
     .command(
@@ -154,7 +178,7 @@ function makeParser(): Argv {
       // The parser throws its own kind of error for a mistake in the arguments, too.
       throw error === undefined || error.name === 'YError' ? usageFailure(message) : error;
     });
-  return referenceCommands(readingCommands(runCommand(parser))).completion(
+  return referenceCommands(flightTestCommand(readingCommands(runCommand(parser)))).completion(
     'completion',
     'print a completion script for bash, zsh or fish',
     offerWords,

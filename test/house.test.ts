@@ -83,8 +83,11 @@ const allowed: Readonly<Record<string, Allowed>> = {
   },
   'read-study-file.ts': { values: ['errors.ts', 'figures', 'stages', 'study'] },
   reports: { values: belowReports },
+  'flight-test': {
+    values: ['charts', 'errors.ts', 'figures', 'methods', 'results', 'stages', 'study', 'version.ts'],
+  },
   'run-study.ts': { values: [...belowReports, 'reports'] },
-  commands: { values: [...belowReports, 'reports', 'run-study.ts'] },
+  commands: { values: [...belowReports, 'reports', 'run-study.ts', 'flight-test'] },
   'cli.ts': { values: ['commands', 'errors.ts', 'version.ts', 'results/machine-fault.ts'] },
 };
 

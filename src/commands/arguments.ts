@@ -25,6 +25,13 @@ export function textOption(name: string, describe: string) {
   return { type: 'string', describe, coerce, requiresArg: true } as const;
 }
 
+/** A text without which the command cannot do; the parser tells when it is missing. */
+export function neededTextOption(name: string, describe: string) {
+  const { coerce: read, ...option } = textOption(name, describe);
+  const coerce = (value: unknown): string => read(value) ?? '';
+  return { ...option, coerce, demandOption: true } as const;
+}
+
 /** One text each time the option is given. */
 export function repeatedTextOption(describe: string) {
   return { type: 'string', array: true, nargs: 1, describe, requiresArg: true } as const;

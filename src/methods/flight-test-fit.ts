@@ -131,6 +131,14 @@ function slopeOf({
   };
 }
 
+/**
+ * Straight line of one series, which by itself tells no neutral point.
+ * @param series at least three points, with lift coefficients that differ
+ */
+export function fitSlope(series: FlightTestSeries): FittedSlope {
+  return slopeOf(sumsOf(series));
+}
+
 function curvatureOf(sums: readonly SeriesSums[], confidence: number): CurvatureTest | undefined {
   const total = (key: 'points' | 'residual' | 'sqq' | 'sqy') => sums.reduce((sum, s) => sum + s[key], 0);
   const degreesOfFreedom = total('points') - 2 * sums.length - 1;
