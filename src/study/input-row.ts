@@ -41,9 +41,3 @@ export const zero = (source: string): InputDefault => ({ value: 0, source });
 export const level = zero('taken as level; common practice, no source');
 export const symmetric = zero('taken as symmetric; common practice, no source');
 export const datum = 'any datum near the aeroplane';
-
-/**
- * Greatest lift coefficient of a whole wing or tail over that of its section, taken where a study
- * does not give it.
- */
-export const shareOfSectionMaximumLift = 0.9;

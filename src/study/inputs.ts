@@ -12,7 +12,8 @@ import type { CgKind } from './study.ts';
 import { tailRows } from './tail-inputs.ts';
 import { wingRows } from './wing-inputs.ts';
 
-export { type InputDefault, type InputDefinition, shareOfSectionMaximumLift } from './input-row.ts';
+export { shareOfSectionMaximumLift } from '../methods/maximum-lift.ts';
+export type { InputDefault, InputDefinition } from './input-row.ts';
 
 const bodyRows: Row[] = [
   ['body.stations[n].at', 'x_[n]', 'length', 'Where body station [n] lies, aft positive.', -100, 160, datum],

@@ -1,6 +1,6 @@
 import { nearestKnown } from './nearest-known.ts';
 import { shorten } from './quantities.ts';
-import { NameList } from './read-names.ts';
+import { columnPart, NameList } from './read-names.ts';
 import type { Reading } from './reading.ts';
 import { firstOf, keySpan, type SourceNode, type Span, valueIn, wordIn } from './source.ts';
 import type { Axis, Condition, Study } from './study.ts';
@@ -91,6 +91,30 @@ function tellName(name: string, span: Span, names: NameList, reading: Reading): 
     const found = `'${name}' stands for every condition.`;
     reading.faults.add('DUPLICATE_NAME', span, found, 'Give each condition a name of its own.');
   }
+}
+
+/**
+ * Figures of a condition carry its name behind their own; no two may come out alike.
+ * @param plain names of the figures that the study has without regard to conditions
+ */
+export function checkFigureNames(
+  root: SourceNode,
+  conditions: readonly Condition[],
+  plain: readonly string[],
+  reading: Reading,
+): void {
+  const list = valueIn(root, 'conditions');
+  if (list?.kind !== 'list') return;
+  const taken = new Set(plain);
+  conditions.forEach(({ name }, index) => {
+    const own = plain.map((figure) => `${figure}_${columnPart(name)}`);
+    const clash = own.find((figure) => taken.has(figure));
+    for (const figure of own) taken.add(figure);
+    const node = valueIn(list.items[index], 'name');
+    if (clash === undefined || !node) return;
+    const found = `A condition '${name}' has a figure ${clash}, and that is another figure's name.`;
+    reading.faults.add('DUPLICATE_NAME', node.span, found, 'Give the condition another name.');
+  });
 }
 
 /** What conditions need of the aeroplane. */

@@ -4,6 +4,11 @@ import type { Span } from './source.ts';
 
 const fittingName = /^[A-Za-z0-9_-]{1,30}$/;
 
+/** A name as columns of the table carry it, which tell neither case nor `-` from `_`. */
+export function columnPart(name: string): string {
+  return name.toLowerCase().replace(/[^a-z0-9]+/g, '_');
+}
+
 /** Names of one kind, as they are found; a name that does not fit, or comes twice, is told. */
 export class NameList {
   readonly #kind: string;
@@ -24,8 +29,7 @@ export class NameList {
       );
       return;
     }
-    // columns of the table carry the name, and tell neither case nor - from _
-    const column = name.toLowerCase().replace(/[^a-z0-9]+/g, '_');
+    const column = columnPart(name);
     const other = this.#taken.get(column);
     if (other !== undefined) {
       const found =

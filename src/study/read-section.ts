@@ -1,5 +1,5 @@
+import { shareOfSectionMaximumLift } from '../methods/maximum-lift.ts';
 import { type Section, sectionByName, sections } from '../methods/sections-table.ts';
-import { shareOfSectionMaximumLift } from './input-row.ts';
 import { offer } from './nearest-known.ts';
 import { shorten } from './quantities.ts';
 import type { Reading } from './reading.ts';

@@ -7,7 +7,12 @@ import { FigureNames, type KnownFigure } from './known-figures.ts';
 import { parseYaml } from './parse-yaml.ts';
 import { readBody } from './read-body.ts';
 import { readCg } from './read-cg.ts';
-import { checkConditionNeeds, readConditions, withFlapsSettled } from './read-conditions.ts';
+import {
+  checkConditionNeeds,
+  checkFigureNames,
+  readConditions,
+  withFlapsSettled,
+} from './read-conditions.ts';
 import { readControl, readLandingGear } from './read-control.ts';
 import { readFlaps } from './read-flaps.ts';
 import { checkCaseMasses, readLoading } from './read-loading.ts';
@@ -196,6 +201,7 @@ function withFigures(
   reading: Reading,
 ): Study {
   const figures = new FigureNames(figuresOf(outline, knownFigures, reading), outline);
+  checkNamesOfFigures(outline, root, knownFigures, reading);
   const size = readSizing(range, root, figures, reading);
   const { band, requirements } = readRequirements(root, outline.conditions, figures, reading);
   const preferences = readPreferences(root, figures, reading);
@@ -208,6 +214,25 @@ function withFigures(
     preferences,
     ...(columns && { columns }),
   };
+}
+
+/** With several conditions each has figures of its own, by its name. */
+function checkNamesOfFigures(
+  outline: Study,
+  root: SourceNode,
+  knownFigures: FiguresOf,
+  reading: Reading,
+): void {
+  const { conditions } = outline;
+  if (conditions.length < 2) return;
+  const plain = figuresOf({ ...outline, conditions: conditions.slice(0, 1) }, knownFigures, reading);
+  if (plain)
+    checkFigureNames(
+      root,
+      conditions,
+      plain.map((figure) => figure.name),
+      reading,
+    );
 }
 
 function figuresOf(

@@ -236,7 +236,7 @@ export interface Study {
   /**
    * Every number of the aeroplane and its conditions, given or assumed, SI, by path. Not there when
    * left out, because they follow from others that may vary: `wing.maximum_lift` and
-   * `tail.maximum_lift` (`shareOfSectionMaximumLift`), `tail.elevator.area` and `.chord` (from
+   * `tail.maximum_lift` (`shareOfSectionMaximumLift` of the section's), `tail.elevator.area` and `.chord` (from
    * `tail.elevator.chord_fraction` and the tail's planform).
    */
   readonly inputs: ReadonlyMap<string, number>;

@@ -57,6 +57,20 @@ const conditionCases: readonly FaultCase[] = [
     says: /one name in the table/,
   },
   {
+    what: 'a name that makes one figure of two',
+    text: edited(['vary:', '  - {name: Tip, speed: 70 kt, height: 0 m}\nvary:']),
+    code: 'DUPLICATE_NAME',
+    mark: 'Tip',
+    says: /wing_span_tip/,
+  },
+  {
+    what: 'two names that make one figure of two',
+    text: edited(['vary:', '  - {name: tip-cruise, speed: 70 kt, height: 0 m}\nvary:']),
+    code: 'DUPLICATE_NAME',
+    mark: 'tip-cruise',
+    says: /wing_span_tip_cruise/,
+  },
+  {
     what: 'two speeds',
     text: climb('{name: climb, times_stall: 1.3, speed: 70 kt, height: 0 m, power: 100 %}'),
     code: 'OVERDETERMINED',

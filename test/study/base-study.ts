@@ -54,6 +54,7 @@ prefer:
 
 export const figures: readonly KnownFigure[] = [
   { name: 'wing_span', dimension: 'length' },
+  { name: 'wing_span_tip', dimension: 'length' },
   { name: 'wing_area', dimension: 'area' },
   { name: 'wing_panels_1_taper', dimension: 'ratio' },
   { name: 'tail_span', dimension: 'length' },
