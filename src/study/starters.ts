@@ -41,8 +41,25 @@ aeroplane:                          # the fixed values are the baseline of the s
       - {at: 6.8 m, width: 0.2 m, depth: 0.35 m}
   cg: {as: percent_mac, forward: 23 %, aft: 33 %, above_datum: 0 m}
 
-conditions:
+  # With more of the aeroplane come more figures. Take away the #, and change the numbers.
+  # Power moves the neutral point; without these lines the propeller is left out.
+  #propeller: {place: tractor, diameter: 1.7 m, blades: 2, blade_chord: 0.13 m, blade_angle: 20 deg, station: 0.1 m, power: 73 kW}
+  # Forces at the grip, and the lift-off of a nose wheel.
+  #control: {kind: stick, gearing: 1.9 rad/m}
+  #landing_gear: {kind: nose_wheel, main_wheels: 2.6 m, rotation_speed: 48 kt}
+  # Masses in place of mass and cg above: then the range of the centre of gravity follows.
+  #loading:
+  #  empty: {mass: 390 kg, station: 2.1 m}
+  #  items:
+  #    crew: {mass: 160 kg, station: 2.3 m}
+  #    fuel: {mass: 60 kg, station: 2.5 m, burns: true}
+  #  cases:
+  #    full: [crew, fuel]
+  #  at_most: 620 kg
+
+conditions:                         # one to twelve
   - {name: cruise, speed: 105 kt, height: 2000 ft}
+  #- {name: climb, times_stall: 1.3, height: 0 m, power: 100 %}
 
 vary:                               # each line is an axis; all combinations are evaluated
   wing.span: {from: 8.4 m, to: 10.4 m, step: 0.25 m, hold: area}

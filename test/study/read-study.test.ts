@@ -190,6 +190,16 @@ test.each(starterKinds)('the starter study of a %s reads without a fault', (kind
   expect(starterStudy(kind)).toMatch(/#/);
 });
 
+test('what the starter offers in comments reads without a fault as well', () => {
+  const full = starterStudy('tourer')
+    .replace(/^( *)#(?! \S)/gm, '$1')
+    .replace(/^ {2}(mass|cg):.*\n/gm, '');
+  const study = readStudy(full, 'tourer.yaml', () => figures);
+  expect(study.loading?.cases).toHaveLength(1);
+  expect(study.conditions.map(({ power }) => power)).toEqual(['idle', 'fraction']);
+  expect(study.propeller && study.control && study.landingGear).toBeDefined();
+});
+
 test('a file is decoded as UTF-8 or refused in plain words', () => {
   const bytes = new TextEncoder().encode(baseStudy);
   expect(decodeStudy(bytes, 'a.yaml')).toBe(baseStudy);
