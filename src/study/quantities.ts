@@ -169,7 +169,9 @@ function wrongDimension(
   text: string,
   dimension: Dimension,
 ): QuantityFault {
-  const what = unit === '%' ? 'a share' : kindWords[meaning.kind];
+  // newton metres and joules have one dimension
+  const ofUnit = meaning.kind === 'moment' ? 'a moment or an energy' : kindWords[meaning.kind];
+  const what = unit === '%' ? 'a share' : ofUnit;
   const known = unitExamples[dimension];
   return {
     code: 'WRONG_DIMENSION',

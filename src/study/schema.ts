@@ -3,61 +3,9 @@
  * editors both come from here. What numbers mean, their units and limits stand in inputs.ts.
  */
 import { z } from 'zod';
-import type { Dimension } from '../figures/figure.ts';
-import { type InputDefinition, inputDefinition, inputDefinitions } from './inputs.ts';
-import { shortNumber, unitExamples } from './quantities.ts';
-import type { CgKind } from './study.ts';
-
-const words = (text: string) => z.string().meta({ description: text });
-const anyNumber = z.union([z.number(), z.string()]);
-
-const examples: Record<Dimension, readonly (string | number)[]> = {
-  length: ['2.5 m', '250 mm', '8.2 ft', '98 in'],
-  area: ['11.4 m^2', '123 ft^2'],
-  volume: ['0.5 m^3', '18 ft^3'],
-  mass: ['610 kg', '1340 lb'],
-  speed: ['105 kt', '195 km/h', '54 m/s', '121 mph'],
-  angle: ['3 deg', '0.05 rad'],
-  per_angle: ['6.1 /rad', '0.106 /deg'],
-  force: ['400 N', '90 lbf'],
-  power: ['73 kW', '98 hp'],
-  moment: ['120 N*m', '90 lbf*ft'],
-  per_length: ['1.9 rad/m', '2.8 deg/in'],
-  force_per_speed: ['0.4 N/kt', '0.1 lbf/kt'],
-  ratio: [0.4, '40 %'],
-  fraction_of_mac: ['25 %', 0.25],
-  count: [5],
-};
-
-function unitWords(dimension: Dimension): string {
-  if (dimension === 'ratio') return 'A ratio: a bare number, or %.';
-  if (dimension === 'fraction_of_mac') return 'A fraction of the MAC: %, or a bare fraction.';
-  return `Unit: ${unitExamples[dimension].join(', ')}.`;
-}
-
-function limitWords({ dimension, least, most }: InputDefinition): string {
-  if (dimension !== 'angle') return `Limits (SI): ${shortNumber(least)} to ${shortNumber(most)}.`;
-  const inDegrees = (angle: number) => shortNumber((angle * 180) / Math.PI);
-  return `Limits: ${inDegrees(least)} deg to ${inDegrees(most)} deg.`;
-}
-
-/** One number of the input table; its description is the table's. */
-function input(path: string, cgKind: CgKind = 'percent_mac') {
-  const entry = inputDefinition(path.replace('[n]', '[1]'), cgKind);
-  const meaning = entry.meaning.replace(/ ?\(?\b1\b\)?(?=[ ,.])/, '');
-  return anyNumber.meta({
-    description: [
-      path.includes('[n]') ? meaning : entry.meaning,
-      unitWords(entry.dimension),
-      limitWords(entry),
-    ].join(' '),
-    examples: [...examples[entry.dimension]],
-  });
-}
-
-function optionalInput(path: string) {
-  return input(path).optional();
-}
+import { inputDefinition, inputDefinitions } from './inputs.ts';
+import { control, flaps, hinge, landingGear, loading, propeller } from './schema-equipment.ts';
+import { anyNumber, input, optionalInput, words } from './schema-input.ts';
 
 const section = (surface: 'wing' | 'tail') =>
   z
@@ -83,26 +31,6 @@ const panel = z.strictObject({
   dihedral: optionalInput('wing.panels[n].dihedral'),
 });
 
-const flaps = z
-  .strictObject({
-    kind: z
-      .enum(['plain', 'slotted'])
-      .meta({ description: 'Kind of flap, with chord_fraction, span_from and span_to.' })
-      .optional(),
-    chord_fraction: optionalInput('wing.flaps.chord_fraction'),
-    span_from: optionalInput('wing.flaps.span_from'),
-    span_to: optionalInput('wing.flaps.span_to'),
-    at: optionalInput('wing.flaps.at'),
-    zero_lift_angle: optionalInput('wing.flaps.zero_lift_angle'),
-    moment: optionalInput('wing.flaps.moment'),
-    maximum_lift: optionalInput('wing.flaps.maximum_lift'),
-    downwash: optionalInput('wing.flaps.downwash'),
-  })
-  .meta({
-    description:
-      'Flaps by their kind, chord and span, or by own increments of the wing at the deflection `at`.',
-  });
-
 const wing = z
   .strictObject({
     area: optionalInput('wing.area'),
@@ -126,15 +54,6 @@ const wing = z
     flaps: flaps.optional(),
   })
   .meta({ description: 'The wing: any two of area, span, aspect_ratio and root_chord settle its size.' });
-
-const hinge = z
-  .strictObject({
-    alpha: optionalInput('tail.elevator.hinge.alpha'),
-    delta: optionalInput('tail.elevator.hinge.delta'),
-    alpha_factor: optionalInput('tail.elevator.hinge.alpha_factor'),
-    delta_factor: optionalInput('tail.elevator.hinge.delta_factor'),
-  })
-  .meta({ description: 'Hinge-moment slopes, or factors on those of thin-aerofoil theory.' });
 
 const elevator = z
   .strictObject({
@@ -225,78 +144,6 @@ const cg = z
     above_datum: optionalInput('cg.above_datum'),
   })
   .meta({ description: 'The range of the centre of gravity, forward and aft end.' });
-
-const propeller = z
-  .union([
-    z.literal('none').meta({ description: 'No propeller.' }),
-    z.strictObject({
-      place: z.enum(['tractor', 'pusher']).meta({ description: 'Ahead of the wing, or behind it.' }),
-      diameter: input('propeller.diameter'),
-      blades: input('propeller.blades'),
-      blade_chord: input('propeller.blade_chord'),
-      blade_angle: input('propeller.blade_angle'),
-      station: input('propeller.station'),
-      above_datum: optionalInput('propeller.above_datum'),
-      power: input('propeller.power'),
-      efficiency: optionalInput('propeller.efficiency'),
-      tail_in_slipstream: optionalInput('propeller.tail_in_slipstream'),
-    }),
-  ])
-  .meta({ description: 'The propeller, or none; none when left out.' });
-
-const control = z
-  .strictObject({
-    kind: z.enum(['stick', 'wheel']).meta({ description: 'What the pilot holds.' }),
-    gearing: input('control.gearing'),
-    spring: optionalInput('control.spring'),
-    bobweight: optionalInput('control.bobweight'),
-  })
-  .meta({ description: 'The pitch control; without it there are no stick forces.' });
-
-const landingGear = z
-  .strictObject({
-    kind: z.enum(['nose_wheel', 'tail_wheel']).meta({ description: 'Where the third wheel is.' }),
-    main_wheels: optionalInput('landing_gear.main_wheels'),
-    rotation_speed: optionalInput('landing_gear.rotation_speed'),
-    ground_angle: optionalInput('landing_gear.ground_angle'),
-    below_datum: optionalInput('landing_gear.below_datum'),
-  })
-  .meta({ description: 'The landing gear; for the forward limit at nose-wheel lift-off.' });
-
-const loadingItem = z
-  .strictObject({
-    mass: input('loading.items[n].mass'),
-    station: optionalInput('loading.items[n].station'),
-    carried_by: z
-      .enum(['wing', 'tail', 'body'])
-      .meta({ description: 'What the item moves with, in place of a station.' })
-      .optional(),
-    at: optionalInput('loading.items[n].at'),
-    height: optionalInput('loading.items[n].height'),
-    burns: z.boolean().meta({ description: 'true for what is used up in flight.' }).optional(),
-  })
-  .meta({ description: 'One item: its mass and where it lies.' });
-
-const loading = z
-  .strictObject({
-    empty: z
-      .strictObject({
-        mass: input('loading.empty.mass'),
-        station: input('loading.empty.station'),
-        height: optionalInput('loading.empty.height'),
-      })
-      .meta({ description: 'The empty aeroplane.' })
-      .optional(),
-    items: z.record(z.string(), loadingItem).meta({ description: 'What is carried, by name.' }),
-    cases: z
-      .record(
-        z.string(),
-        z.array(z.string()).meta({ description: 'Items aboard; those that burn, in the order of burning.' }),
-      )
-      .meta({ description: 'Loading cases by name.' }),
-    at_most: optionalInput('loading.at_most'),
-  })
-  .meta({ description: 'Masses and loading cases, from which the CG range follows; in place of cg.' });
 
 const aeroplane = z
   .strictObject({

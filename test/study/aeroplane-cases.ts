@@ -226,6 +226,13 @@ const equipmentCases: readonly FaultCase[] = [
     says: /unit of a force, and a power/,
   },
   {
+    what: 'an energy for a power',
+    text: wholeEdited(['98 hp', '98 kWh']),
+    code: 'WRONG_DIMENSION',
+    mark: '98 kWh',
+    says: /an energy/,
+  },
+  {
     what: 'a gearing without unit',
     text: wholeEdited(['1.9 rad/m', '1.9']),
     code: 'MISSING_UNIT',
