@@ -19,7 +19,8 @@ export function readStudyText(text: string, file: string): Study {
 /** The figures that a study can require, prefer or put in its table: those that it gives or that are worked out. */
 function knownFigures(study: Study): KnownFigure[] {
   const figures = figuresOfStudy(study, { requirements: [], ranges: [], reasons: [], conditions: [] });
-  const workedOut = new Set(buildStages(study).flatMap((stage) => stage.writes));
+  // Naming a figure of control is a reason to work it out, so all of them are known here.
+  const workedOut = new Set(buildStages(study, true).flatMap((stage) => stage.writes));
   return [...figures.values()]
     .filter(({ name, formula }) => formula === 'given' || workedOut.has(name))
     .map(({ name, dimension, kind }) => ({ name, dimension, onlyInTable: kind !== 'number' }));

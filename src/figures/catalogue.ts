@@ -1,4 +1,5 @@
 import { balanceFigures } from './catalogue/balance-figures.ts';
+import { controlFigures, tabledControlFigures } from './catalogue/control-figures.ts';
 import { type Entry, entry, sources } from './catalogue/entry.ts';
 import { loadingFigures } from './catalogue/loading-figures.ts';
 import { tailFigures } from './catalogue/tail-figures.ts';
@@ -23,6 +24,7 @@ const entries = {
   ...tailFigures,
   ...loadingFigures,
   ...balanceFigures,
+  ...controlFigures,
   ...verdictFigures,
 } as const satisfies Record<string, Entry>;
 
@@ -64,8 +66,16 @@ const worksheetOnly: ReadonlySet<FigureName> = new Set<FigureName>([
   'body_wing_place',
 ]);
 
+const tabledControl: ReadonlySet<string> = new Set(tabledControlFigures);
+
 export function isWorksheetOnly(name: string): boolean {
+  if (isControlFigure(name)) return !tabledControl.has(name);
   return worksheetOnly.has(name as FigureName);
+}
+
+/** Whether a figure is one of trim, free stick, manoeuvre, stick forces or the forward limit. */
+export function isControlFigure(name: string): boolean {
+  return Object.hasOwn(controlFigures, name);
 }
 
 /** Names of all figures worked out, in order. */

@@ -1,4 +1,5 @@
 import type { Condition } from '../study/study.ts';
+import { controlFigures } from './catalogue/control-figures.ts';
 
 /**
  * Figures that each flight condition has of its own. With several conditions a study has one of each
@@ -55,16 +56,32 @@ const conditionFigures: ReadonlySet<string> = new Set([
   'neutral_point_correction',
 ]);
 
+/** Figures of control that belong to the aeroplane, or to all conditions together. */
+const controlOfAll: ReadonlySet<string> = new Set([
+  'wing_twist_couple',
+  'body_couple_slope',
+  'tail_elevator_area',
+  'tail_elevator_chord',
+  'control_limit_forward',
+  'control_limit_condition',
+  'control_limit_kind',
+  'control_margin_forward',
+]);
+
+function isOfCondition(name: string): boolean {
+  return conditionFigures.has(name) || (Object.hasOwn(controlFigures, name) && !controlOfAll.has(name));
+}
+
 /** Bits of the single range checks, which the flags are gathered from. */
 const rangeBit = /^range_bit_/;
 
 export function isConditionFigure(name: string): boolean {
-  return conditionFigures.has(name) || rangeBit.test(name);
+  return isOfCondition(name) || rangeBit.test(name);
 }
 
 /** Whether a figure of a condition is in the catalogue; bits of single checks are not. */
 export function isTabledFigure(name: string): boolean {
-  return conditionFigures.has(name);
+  return isOfCondition(name);
 }
 
 /** `neutral_point` in the condition `cruise` → `neutral_point_cruise`. */

@@ -2,6 +2,7 @@ import type { Study } from '../study/study.ts';
 import type { FigureName } from './catalogue.ts';
 import { catalogueFigure, figureNames } from './catalogue.ts';
 import { conditionFigureName, isConditionFigure } from './condition-figures.ts';
+import { controlLimitKinds } from './control-limit-kinds.ts';
 import type { Figure } from './figure.ts';
 import { inputFigure, inputFigureName } from './input-figures.ts';
 
@@ -78,6 +79,9 @@ function labelsOf(name: FigureName, labels: StudyLabels, { loading }: Study): re
       return labels.ranges;
     case 'not_computed_because':
       return labels.reasons;
+    case 'control_limit_kind':
+      return controlLimitKinds.map(({ label }) => label);
+    case 'control_limit_condition':
     case 'governing_condition_aft':
     case 'governing_condition_forward':
       return labels.conditions;

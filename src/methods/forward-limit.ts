@@ -8,6 +8,9 @@
  * 0.01–0.10 MAC (ours), hence two functions, named.
  */
 
+/** Rolling friction μ of the main wheels on a hard runway [-]; 0.02–0.05. Common practice, no source. */
+export const customaryRollingFriction = 0.03;
+
 /**
  * Lift on S of the tail at a lift of the wing and an elevator angle [-]:
  * C_Lt0 + η a_t (S_t/S)(1 − ε_α) C_Lw/a_w + C_Lδ δ.

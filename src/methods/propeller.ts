@@ -216,6 +216,17 @@ export function thrustMomentSlopeAtPower(thrustMoment: number, liftCoefficient: 
   return (thrustExponent.constantPower * thrustMoment) / liftCoefficient;
 }
 
+/**
+ * Thrust's moment at another lift coefficient in level flight at the same power, C_m,T (C_L2/C_L)^(3/2) [-].
+ * @param thrustMoment    C_m,T at C_L [-]
+ * @param liftCoefficient C_L > 0 [-]
+ * @param other           C_L2 ≥ 0 [-]
+ * Exact for a constant propeller efficiency.
+ */
+export function thrustMomentAtPower(thrustMoment: number, liftCoefficient: number, other: number): number {
+  return thrustMoment * (other / liftCoefficient) ** thrustExponent.constantPower;
+}
+
 /** Slope dC_m,T/dC_L at constant thrust, C_m,T/C_L [-]; both [-], C_L not 0. Exact. */
 export function thrustMomentSlopeAtThrust(thrustMoment: number, liftCoefficient: number): number {
   return (thrustExponent.constantThrust * thrustMoment) / liftCoefficient;

@@ -210,6 +210,23 @@ export function wingBodyPosition(wingPosition: number, bodySlope: number, wingLi
 }
 
 /**
+ * Place h_wb of the lift of all but the tail, from the neutral point [-]: (h_n C_Lα − h_t a_ts)/(C_Lα − a_ts).
+ * @param neutralPoint h_n, without the step by height [-]
+ * @param wholeSlope   C_Lα [1/rad]
+ * @param tailPosition h_t [-]
+ * @param tailShare    a_ts, not C_Lα [1/rad]
+ * Exact: the shares solved for the rest. A propeller's share and a measured correction of h_n are in it.
+ */
+export function restPosition(
+  neutralPoint: number,
+  wholeSlope: number,
+  tailPosition: number,
+  tailShare: number,
+): number {
+  return (neutralPoint * wholeSlope - tailPosition * tailShare) / (wholeSlope - tailShare);
+}
+
+/**
  * Lift on S that the tail carries at trim [-]: [couples + (h − h_wb) C_L]/(h_t − h_wb).
  * @param liftCoefficient C_L of the whole aeroplane [-]
  * @param centreOfGravity h [-]

@@ -1,6 +1,7 @@
 import { bodyMomentSlope, multhoppAft, multhoppForward } from '../methods/body.ts';
-import { quickBodyMoment } from '../methods/body-estimates.ts';
+import { munkApparentMass, quickBodyMoment } from '../methods/body-estimates.ts';
 import { bodyStationPlace, bodyWidthAt } from '../methods/body-stations.ts';
+import { bodyZeroLiftMoment } from '../methods/zero-lift-moment.ts';
 import type { Study } from '../study/study.ts';
 import { nilStage } from './nil.ts';
 import type { Stage } from './stage.ts';
@@ -215,6 +216,78 @@ function quickStage(body: BodyReader, places: BaselinePlaces): Stage {
       }
     },
   };
+}
+
+/**
+ * Couple of the body at nil wing lift over its angle there [1/rad]: no camber of its centre line, apparent
+ * mass by length over greatest width. A boom counts with its own width.
+ */
+export function bodyCoupleStage({ body }: BodyStudy, places: BaselinePlaces): Stage {
+  if (body === undefined) return nilStage('no couple of the body', ['body_couple_slope']);
+  const reader = new BodyReader(body);
+  const own = reader.size;
+  const [stations, widths, cambers] = [0, 1, 2].map(() => new Float64Array(reader.count + 2));
+  const unitAngle = 1;
+  return {
+    name: 'couple of the body',
+    reads: [...reader.reads, 'wing_root_chord', 'wake_length', 'wing_area', 'mac'],
+    writes: ['body_couple_slope'],
+    cost: 100 + 20 * reader.count,
+    kernel: (count, inputs, [couple]) => {
+      const [chord, wake, area, mac] = inputs.slice(own);
+      for (let row = 0; row < count; row++) {
+        if (!reader.read(inputs, row)) {
+          couple[row] = Number.NaN;
+          continue;
+        }
+        const tail = chord[row] + wake[row];
+        const used = placeStations(reader, places, chord[row], tail, stations, widths);
+        const length = stations[used - 1] - stations[0];
+        const apparentMass = munkApparentMass(length / greatest(reader.widths));
+        couple[row] = bodyZeroLiftMoment(
+          used,
+          stations,
+          widths,
+          cambers,
+          unitAngle,
+          apparentMass,
+          area[row],
+          mac[row],
+        );
+      }
+    },
+  };
+}
+
+/** Puts the stations where they go in a combination, a boom's two ends behind them; returns how many. */
+function placeStations(
+  body: BodyReader,
+  { rootLeadingEdge, rootChord, tail: baselineTail }: BaselinePlaces,
+  chord: number,
+  tail: number,
+  stations: Float64Array,
+  widths: Float64Array,
+): number {
+  const last = body.at[body.count - 1] - rootLeadingEdge;
+  for (let i = 0; i < body.count; i++) {
+    const x = body.at[i] - rootLeadingEdge;
+    stations[i] = bodyStationPlace(
+      x,
+      rootChord,
+      baselineTail - rootLeadingEdge,
+      last,
+      chord,
+      tail,
+      body.hasBoom,
+    );
+    widths[i] = body.widths[i];
+  }
+  if (!body.hasBoom) return body.count;
+  stations[body.count] = stations[body.count - 1];
+  widths[body.count] = body.boomWidth;
+  stations[body.count + 1] = tail;
+  widths[body.count + 1] = body.boomWidth;
+  return body.count + 2;
 }
 
 function greatest(values: Float64Array): number {

@@ -1,15 +1,20 @@
 import { figureOfInput } from '../figures/study-figures.ts';
 import type { Condition, Study } from '../study/study.ts';
 import type { BaselinePlaces } from './body.ts';
-import { bodyMomentStages, bodyShapeStages, wakeLengthStage } from './body.ts';
+import { bodyCoupleStage, bodyMomentStages, bodyShapeStages, wakeLengthStage } from './body.ts';
 import { maximumLiftStage, speedStages } from './condition.ts';
 import { stagesOfConditions } from './conditions.ts';
+import { assessesControl } from './control.ts';
+import { controlLimitStages } from './control-limit.ts';
 import { angleOfAttackStage, downwashStage, machRatioStage } from './downwash.ts';
 import { flapDownwashStages, flapStages } from './flaps.ts';
+import { forwardLimitStages } from './forward-limit.ts';
+import { elevatorSizeStage, freeStickStages, hasStickForces } from './free-stick.ts';
 import { governingStages } from './governing.ts';
 import { groundLiftStage } from './ground-effect.ts';
 import { loadingStages } from './loading.ts';
 import { loadingRangeStages, marginsStage, windowStage } from './loading-range.ts';
+import { manoeuvreStages } from './manoeuvre.ts';
 import { heightStage, neutralPointStage, sharesStage, stepsStage } from './neutral-point.ts';
 import { rangeStages, reasonStage } from './out-of-range.ts';
 import { propellerShareStages, propellerStages, tailStreamStages } from './propeller.ts';
@@ -25,14 +30,24 @@ import {
   tailPlanformStage,
   tailSizeStage,
 } from './tail.ts';
+import { trimStages } from './trim.ts';
+import { wingTwistStage } from './wing-couples.ts';
 import { carryOverStage, centreStationStage, wingCentreStage, wingLiftStage } from './wing-lift.ts';
 import { wingPlanformStage, wingStationsStage } from './wing-planform.ts';
+import { zeroLiftStages } from './zero-lift.ts';
 
-/** Every stage of a study in the order of computation. */
-export function buildStages(study: Study): Stage[] {
+/**
+ * Every stage of a study in the order of computation.
+ * @param control whether trim, free stick, manoeuvre and the forward limit are worked out
+ */
+export function buildStages(study: Study, control = assessesControl(study)): Stage[] {
   const skip = study.skip.length === 0 ? [] : [skipStage(study.skip, figureOfInput(study))];
   const places = baselinePlaces(study);
-  const ofConditions = stagesOfConditions(study, (condition) => conditionStages(study, condition, places));
+  const ofConditions = stagesOfConditions(study, (condition) => [
+    ...conditionStages(study, condition, places),
+    ...(control ? controlStages(study, condition) : []),
+    ...rangeStages(study),
+  ]);
   return [
     ...skip,
     ...placeStages(study),
@@ -46,9 +61,11 @@ export function buildStages(study: Study): Stage[] {
     ...bodyShapeStages(study, places),
     ...loadingStages(study, places),
     ...loadingRangeStages(study),
+    ...(control ? controlShapeStages(study, places) : []),
     ...ofConditions.stages,
     ...governingStages(study, ofConditions.common),
-    windowStage(study),
+    ...(control ? controlLimitStages(study) : []),
+    windowStage(study, control),
     reasonStage,
     requirementsStage(requirementEdges(study)),
   ];
@@ -79,7 +96,23 @@ function conditionStages(study: Study, condition: Condition, places: BaselinePla
     heightStage(study),
     neutralPointStage(study),
     marginsStage,
-    ...rangeStages(study),
+  ];
+}
+
+/** What trim and control need of the aeroplane whatever the condition. */
+function controlShapeStages(study: Study, places: BaselinePlaces): Stage[] {
+  const sized = hasStickForces(study) ? [elevatorSizeStage(study)] : [];
+  return [wingTwistStage(study), bodyCoupleStage(study, places), ...sized];
+}
+
+/** Stages of trim, free stick, manoeuvre and forward limits in one condition. */
+function controlStages(study: Study, condition: Condition): Stage[] {
+  return [
+    ...zeroLiftStages(study, condition),
+    ...trimStages(study, condition),
+    ...freeStickStages(study),
+    ...manoeuvreStages(study),
+    ...forwardLimitStages(study, condition),
   ];
 }
 

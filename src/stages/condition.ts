@@ -5,7 +5,7 @@ import {
   machFromCalibratedSpeed,
   machFromDynamicPressure,
 } from '../methods/atmosphere.ts';
-import { shareOfSectionMaximumLift } from '../study/inputs.ts';
+import { shareOfSectionMaximumLift } from '../methods/maximum-lift.ts';
 import type { Condition, Study } from '../study/study.ts';
 import type { Stage } from './stage.ts';
 

@@ -9,6 +9,23 @@ type GovernedStudy = Pick<Study, 'conditions' | 'band'>;
 const notCopied = new Set(['outside_fitted_range', 'static_margin_forward', 'static_margin_aft']);
 
 /**
+ * Figures whose plain name stands for the least (−1) or the greatest (1) over the conditions, because a
+ * limit on them is meant in all: the condition with the least neutral point need not have the least
+ * manoeuvre margin.
+ */
+const worst: Readonly<Record<string, 1 | -1>> = {
+  neutral_point_free_stick: -1,
+  static_margin_free_stick_forward: 1,
+  static_margin_free_stick_aft: -1,
+  manoeuvre_point: -1,
+  manoeuvre_margin_aft: -1,
+  manoeuvre_point_free_stick: -1,
+  manoeuvre_margin_free_stick_aft: -1,
+  stick_force_per_g_forward: 1,
+  stick_force_per_g_aft: -1,
+};
+
+/**
  * With several conditions: which one governs each end of the loading range, and every condition
  * figure under its plain name as it is in the one that governs the aft margin. The lower edge of the
  * band holds in `lowerIn`, the upper in `upperIn`; the least neutral point of the first governs aft,
@@ -25,7 +42,12 @@ export function governingStages(study: GovernedStudy, common: readonly string[])
   return [
     extremeStage('aft', conditions, positions(band.lowerIn), -1),
     extremeStage('forward', conditions, positions(band.upperIn), 1),
-    ...common.filter((name) => !notCopied.has(name)).map((name) => copyStage(name, conditions)),
+    ...common
+      .filter((name) => !notCopied.has(name))
+      .map((name) => {
+        const sign = worst[name];
+        return sign === undefined ? copyStage(name, conditions) : worstStage(name, conditions, sign);
+      }),
     governingMarginsStage,
     unionStage(conditions),
   ];
@@ -75,6 +97,25 @@ function copyStage(name: string, conditions: readonly Condition[]): Stage {
       for (let row = 0; row < count; row++) {
         const condition = governing[row];
         plain[row] = Number.isNaN(condition) ? Number.NaN : inputs[1 + condition][row];
+      }
+    },
+  };
+}
+
+/** Gives a figure's plain name to its least (sign −1) or greatest (sign 1) value over the conditions; empty when any is. */
+function worstStage(name: string, conditions: readonly Condition[], sign: 1 | -1): Stage {
+  return {
+    name: `${name}, ${sign === 1 ? 'greatest' : 'least'} of all conditions`,
+    reads: conditions.map((condition) => conditionFigureName(name, condition)),
+    writes: [name],
+    cost: 2 * conditions.length,
+    kernel: (count, inputs, [plain]) => {
+      plain.set(inputs[0].subarray(0, count));
+      for (let k = 1; k < inputs.length; k++) {
+        const values = inputs[k];
+        for (let row = 0; row < count; row++) {
+          plain[row] = sign === 1 ? Math.max(plain[row], values[row]) : Math.min(plain[row], values[row]);
+        }
       }
     },
   };

@@ -69,17 +69,30 @@ export const governingMarginsStage: Stage = {
   },
 };
 
-/** The CG window that the band allows; an end is empty where the band has no such edge. */
-export function windowStage({ band, conditions }: Pick<Study, 'band' | 'conditions'>): Stage {
+/**
+ * The CG window that band and control allow; an end is empty where the band has no such edge and nothing
+ * else limits it.
+ * @param control whether the forward limit of control is worked out
+ */
+export function windowStage(
+  { band, conditions }: Pick<Study, 'band' | 'conditions'>,
+  control: boolean,
+): Stage {
   const { lower = Number.NaN, upper = Number.NaN } = band;
   return {
     name: 'CG window',
-    reads: ['neutral_point', conditions.length === 1 ? 'neutral_point' : 'neutral_point_aftmost'],
+    reads: [
+      'neutral_point',
+      conditions.length === 1 ? 'neutral_point' : 'neutral_point_aftmost',
+      ...(control ? ['control_limit_forward'] : []),
+    ],
     writes: ['cg_window_forward', 'cg_window_aft'],
     cost: 2,
-    kernel: (count, [least, greatest], [forward, aft]) => {
+    kernel: (count, [least, greatest, limit], [forward, aft]) => {
       for (let row = 0; row < count; row++) {
-        forward[row] = greatest[row] - upper;
+        const byBand = greatest[row] - upper;
+        const open = band.upper === undefined ? Number.NEGATIVE_INFINITY : byBand;
+        forward[row] = limit === undefined ? byBand : Math.max(open, limit[row]);
         aft[row] = least[row] - lower;
       }
     },

@@ -107,6 +107,11 @@ export function hasTailStream({ propeller, conditions }: Pick<Study, 'propeller'
   return propeller !== undefined || conditions.some(({ groundEffect }) => groundEffect);
 }
 
+/** The figure that holds the dynamic-pressure ratio at the tail. */
+export function pressureRatioFigure(study: Pick<Study, 'propeller' | 'conditions'>): string {
+  return hasTailStream(study) ? 'tail_pressure_ratio' : 'tail_dynamic_pressure_ratio';
+}
+
 /** Dynamic-pressure ratio and downwash gradient at the tail with slipstream and ground. */
 export function tailStreamStages(
   study: Pick<Study, 'propeller' | 'conditions'>,

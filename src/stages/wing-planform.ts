@@ -49,7 +49,7 @@ const figureOfSize: Record<WingSize, string> = {
 
 type WingStudy = Pick<Study, 'wing'>;
 
-interface PanelReads {
+export interface PanelReads {
   readonly width: string | null;
   readonly taper: string;
   readonly sweep: string;
@@ -58,7 +58,7 @@ interface PanelReads {
 }
 
 /** Figures that describe each panel; a plain trapezoid is a wing of one panel. */
-function panelReads({ wing }: WingStudy): PanelReads[] {
+export function panelReads({ wing }: Pick<Study, 'wing'>): PanelReads[] {
   if (wing.form === 'trapezoid') {
     return [
       {

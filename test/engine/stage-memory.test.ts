@@ -137,7 +137,7 @@ cg: [{forward: 20 %, aft: 29 %}, {forward: 28 %, aft: 38 %}]`;
 
   it('does not hold all of a stage with very many settings', () => {
     const { plan, rows, evaluate } = counted(study);
-    const stage = plan.stages.findIndex(({ name }) => name === 'neutral point');
+    const stage = plan.stages.findIndex(({ name }) => name === 'steps of the neutral point');
     const bytes = 8 * 5 * settings(plan, stage);
     expect(bytes).toBeGreaterThan(2 * 4 * 1024 * 1024);
     evaluate();

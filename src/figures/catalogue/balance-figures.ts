@@ -230,8 +230,8 @@ export const balanceFigures = {
   cg_window_forward: entry(
     'h_w,fwd',
     'fraction_of_mac',
-    'Foremost CG that the band’s upper edge allows; empty without an upper edge.',
-    'h_w,fwd = h_n − upper edge',
+    'Foremost CG that the band’s upper edge and the forward limit of control allow; empty without either.',
+    'h_w,fwd = max(h_n − upper edge, h_c)',
     definition,
   ),
   cg_window_aft: entry(
