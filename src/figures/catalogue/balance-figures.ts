@@ -71,7 +71,7 @@ export const balanceFigures = {
     'Δh_z',
     'fraction_of_mac',
     'Build-up of the neutral point: wing above or below the CG, at the condition’s lift; 0 unless the study gives the height of the CG.',
-    'Δh_z = (z_w/c) C_L (2/a − 2/(πAe)), z_w = wing height + z_c − CG height',
+    'Δh_z = ((z_w + z_c − z_cg)/c) C_L (2/a − 2/(πAe))',
     'derived from the tilt of lift and induced drag',
   ),
   neutral_point: entry(
