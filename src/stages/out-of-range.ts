@@ -185,9 +185,8 @@ export const reasonStage: Stage = {
     for (let row = 0; row < count; row++) {
       if (Number.isNaN(wake[row])) reason[row] = 0;
       else if (Number.isNaN(body[row])) reason[row] = 1;
-      else if (forward[row] > aft[row]) reason[row] = 2;
-      else if (Number.isFinite(point[row])) reason[row] = Number.NaN;
-      else reason[row] = taper[row] === 0 ? 4 : 3;
+      else if (!Number.isFinite(point[row])) reason[row] = taper[row] === 0 ? 4 : 3;
+      else reason[row] = forward[row] > aft[row] ? 2 : Number.NaN;
     }
   },
 };

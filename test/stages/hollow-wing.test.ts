@@ -15,8 +15,8 @@ const figures = [
   'not_computed_because',
   'outside_fitted_range',
 ];
-const rowOf = (rest: string) => {
-  const columns = evaluateAll(planOf(testStudy({ wing, rest })), figures);
+const rowOf = (rest: string, vary = '') => {
+  const columns = evaluateAll(planOf(testStudy({ wing, rest, vary })), figures);
   return Object.fromEntries(figures.map((name) => [name, columnOf(columns, name)[0]]));
 };
 
@@ -27,6 +27,11 @@ describe('a wing hollower than a triangle', () => {
     expect(row.wing_formula_taper).toBe(0);
     expect(row.downwash_torenbeek).toBeNaN();
     expect(row.neutral_point).toBeNaN();
+    expect(reasonLabels[row.not_computed_because]).toContain('hollower than a triangle');
+  });
+
+  it('is told before a CG range that is reversed as well', () => {
+    const row = rowOf('', 'cg.forward: [0.35]\ncg.aft: [0.3]');
     expect(reasonLabels[row.not_computed_because]).toContain('hollower than a triangle');
   });
 
