@@ -29,6 +29,7 @@ export type FigureName = keyof typeof entries;
 /** Figures that show the inside of the calculation: in worksheets, not in the bulk table. */
 const worksheetOnly: ReadonlySet<FigureName> = new Set<FigureName>([
   'wing_formula_sweep_half_chord',
+  'neutral_point_height_datum',
   'body_moment_forward',
   'body_moment_aft',
   'tail_lift_share',
