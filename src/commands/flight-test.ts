@@ -80,7 +80,7 @@ async function drawStates(
     for (const measured of compared.measured) {
       const title = `Flight test: ${compared.state.name}`;
       const heading = { title, study: study.title, date, program: of };
-      const data = flightTestChartData(measured, prediction, heading);
+      const data = flightTestChartData(measured, compared.state, prediction, heading);
       if (data === undefined) continue;
       const name = ['flight-test', index + 1, slug(compared.state.name), measured.kind].join('-');
       await renderChart(name, flightTestSlopes(data), folder);

@@ -13,9 +13,21 @@ const tableSlope: Wording = {
   source: 'our own lifting-surface results; scaling by Lowry and Polhamus, NACA TN 3911, from memory',
 };
 const jonesSlope: Wording = {
-  formula: 'a = a_0 A/(E A + a_0/π), E semiperimeter/span, Prandtl–Glauert for M',
+  formula: 'a = a_0 A/((E − 1 + β) A + a_0/π), E semiperimeter/span, β² = 1 − M²',
   source: 'R. T. Jones, NACA TN 817, from memory',
 };
+
+/** The tail's slope in the tail's own symbols, with what a V-tail loses. */
+function tailSlopeWording({ tail, methods }: Study): Wording {
+  const vTail = tail.layout === 'V' ? ', times cos²Γ_t' : '';
+  const formula = {
+    polhamus: 'a_t as a, with the tail’s own A_t, λ_t, Λ_t, a_0_t',
+    table: 'a_t from the wing table at A_t, λ_t, Λ_t, scaled as a for κ and M',
+    jones: 'a_t as a, with the tail’s own A_t, E, a_0_t',
+  }[methods.lift_slope];
+  const source = { polhamus: {}, table: tableSlope, jones: jonesSlope }[methods.lift_slope].source;
+  return { formula: formula + vTail, ...(source !== undefined && { source }) };
+}
 
 /** Wording of figures whose formula the study's choice of methods settles. */
 function chosenWording(study: Study): Partial<Record<FigureName, Wording>> {
@@ -23,7 +35,10 @@ function chosenWording(study: Study): Partial<Record<FigureName, Wording>> {
   const slope = { polhamus: {}, table: tableSlope, jones: jonesSlope }[methods.lift_slope];
   return {
     wing_lift_slope: slope,
-    tail_lift_slope: slope,
+    tail_lift_slope: tailSlopeWording(study),
+    ...(methods.aerodynamic_centre === 'quarter_mac' && {
+      tail_aerodynamic_centre: { formula: 'h_ac,t = x_ac_t/c', source: 'common practice, no source' },
+    }),
     wing_aerodynamic_centre: {
       formula: methods.aerodynamic_centre === 'table' ? 'h_ac = h_table' : 'h_ac = h_quarter',
     },

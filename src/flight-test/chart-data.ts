@@ -1,8 +1,9 @@
 /** Data of the flight-test chart: trailing edge up and pull upward, as in the other charts of control. */
-import type { ChartHeading, FlightTestSlopesData, FlownCg, StraightLine } from '../charts/index.ts';
+import type { ChartHeading, FlightTestSlopesData, FlownCg } from '../charts/index.ts';
 import type { FlownSeries, MeasuredNeutralPoint } from './measure.ts';
-import type { Prediction } from './predict.ts';
-import { shownControl } from './report.ts';
+import type { PredictedLine, Prediction } from './predict.ts';
+import { controlFactor, pointName } from './report.ts';
+import type { FlownState } from './states.ts';
 
 const titles = {
   'stick-fixed': {
@@ -16,20 +17,20 @@ const titles = {
 } as const;
 
 /**
- * One measured neutral point as a chart; undefined where no CG gives a slope.
- * A predicted line has the study's slope and goes through the middle of the measured points, since slopes
- * alone tell of stability.
+ * One measured neutral point as a chart; undefined where no CG gives a slope. Where the study does not
+ * settle a predicted line's place, as that of a force with its tab, it goes through the middle of the
+ * measured points: slopes alone tell of stability.
  */
 export function flightTestChartData(
   { kind, series, fit }: MeasuredNeutralPoint,
+  state: FlownState,
   prediction: Prediction,
   heading: ChartHeading,
 ): FlightTestSlopesData | undefined {
-  const upward = kind === 'stick-fixed' ? -1 : 1;
-  const factor = upward * shownControl(kind).factor;
-  const predicted = kind === 'stick-fixed' && Number.isFinite(prediction.neutralPoint);
+  const factor = (kind === 'stick-fixed' ? -1 : 1) * controlFactor(kind);
+  const predicted = prediction.of[kind];
   const flown = series.flatMap((one): FlownCg[] =>
-    one.slope === undefined ? [] : [flownCg(one, one.slope, factor, predicted ? prediction : undefined)],
+    one.slope === undefined ? [] : [flownCg(one, one.slope, predicted.lineAt(one.cg), factor)],
   );
   if (flown.length === 0) return undefined;
   const trend = fit === undefined ? Number.NaN : fit.slopeByCentreOfGravity * factor;
@@ -37,11 +38,11 @@ export function flightTestChartData(
     heading,
     measuredTitle: titles[kind].measured,
     slopeTitle: titles[kind].slope,
-    pointName: shownControl(kind).point,
+    pointName: pointName(kind, state),
     flown,
     slopeLine: fit === undefined ? null : { slope: trend / 100, atLeadingEdge: -trend * fit.neutralPoint },
     neutralPoint: fit === undefined ? null : { at: 100 * fit.neutralPoint, ...limitsOf(fit) },
-    ...(predicted ? { predictedNeutralPoint: 100 * prediction.neutralPoint } : {}),
+    ...(Number.isNaN(predicted.at) ? {} : { predictedNeutralPoint: 100 * predicted.at }),
   };
 }
 
@@ -52,19 +53,20 @@ function limitsOf({ limits }: NonNullable<MeasuredNeutralPoint['fit']>) {
 function flownCg(
   { cg, liftCoefficients, controls, slopeUncertainty }: FlownSeries,
   { slope, intercept }: NonNullable<FlownSeries['slope']>,
+  predicted: PredictedLine,
   factor: number,
-  prediction: Prediction | undefined,
 ): FlownCg {
-  const fitted: StraightLine = { slope: slope * factor, atNoLift: intercept * factor };
-  const own = prediction === undefined ? Number.NaN : prediction.elevatorSlopeAt(cg) * factor;
   const meanLift = liftCoefficients.reduce((sum, lift) => sum + lift, 0) / liftCoefficients.length;
-  const through = fitted.atNoLift + (fitted.slope - own) * meanLift;
+  const throughMiddle = intercept + (slope - predicted.slope) * meanLift;
+  const atNoLift = Number.isNaN(predicted.atNoLift) ? throughMiddle : predicted.atNoLift;
   return {
     cg: 100 * cg,
     liftCoefficients,
     measured: controls.map((control) => control * factor),
-    fitted,
+    fitted: { slope: slope * factor, atNoLift: intercept * factor },
     ...(slopeUncertainty === undefined ? {} : { slopeUncertainty: slopeUncertainty * Math.abs(factor) }),
-    ...(Number.isFinite(own) ? { predicted: { slope: own, atNoLift: through } } : {}),
+    ...(Number.isFinite(predicted.slope)
+      ? { predicted: { slope: predicted.slope * factor, atNoLift: atNoLift * factor } }
+      : {}),
   };
 }

@@ -33,12 +33,13 @@ export function compareState(
   const warnings = conditionWarnings(state, prediction);
   const fit = measured.find(({ kind }) => kind === 'stick-fixed')?.sound;
   const compared = { state, measured, warnings };
-  if (Number.isNaN(prediction.neutralPoint)) return withWarning(compared, 'NO_PREDICTION', noPrediction);
+  const predicted = prediction.of['stick-fixed'].at;
+  if (Number.isNaN(predicted)) return withWarning(compared, 'NO_PREDICTION', noPrediction);
   // A difference between two states would be taken for an error of the estimate.
   if (fit === undefined || warnings.length > 0) return compared;
-  const value = fit.neutralPoint - prediction.neutralPoint;
+  const value = fit.neutralPoint - predicted;
   if (Math.abs(value) <= largestCorrection) {
-    return { ...compared, correction: { value, cautious: fit.limits.lower - prediction.neutralPoint, fit } };
+    return { ...compared, correction: { value, cautious: fit.limits.lower - predicted, fit } };
   }
   const text = `The correction would be ${(100 * value).toFixed(1)} % MAC, and studies take 20 % at most: is this the aeroplane that was flown?`;
   return withWarning(compared, 'CORRECTION_TOO_LARGE', text);

@@ -5,6 +5,7 @@ import type { ComparedState } from './compare.ts';
 import type { FlownSeries, MeasuredNeutralPoint, PointKind } from './measure.ts';
 import type { Prediction } from './predict.ts';
 import type { FlownPoint } from './read-data.ts';
+import type { FlownState } from './states.ts';
 import type { Warning } from './warnings.ts';
 
 export interface FlightTestReport {
@@ -27,26 +28,37 @@ const perKilopascal = 1000;
 
 /** How a control is shown: factor from SI, decimals, names. */
 const shown: Readonly<
-  Record<PointKind, { factor: number; decimals: number; control: string; unit: string; point: string }>
+  Record<
+    PointKind,
+    { factor: number; decimals: number; control: string; unit: string; atIdle: string; withPower: string }
+  >
 > = {
   'stick-fixed': {
     factor: degrees,
     decimals: 2,
     control: 'elevator, trailing edge down',
     unit: '°',
-    point: 'stick-fixed neutral point',
+    atIdle: 'stick-fixed neutral point',
+    withPower: 'trim slope limit, stick fixed',
   },
   'stick-free': {
     factor: perKilopascal,
     decimals: 3,
     control: 'stick force over dynamic pressure, pull',
     unit: 'N/kPa',
-    point: 'stick-free neutral point',
+    atIdle: 'stick-free neutral point',
+    withPower: 'trim slope limit, stick free',
   },
 };
 
-export function shownControl(kind: PointKind) {
-  return shown[kind];
+/** Factor from SI in which a control is shown. */
+export function controlFactor(kind: PointKind): number {
+  return shown[kind].factor;
+}
+
+/** Name of the point at which the control goes flat: with power on it is not the neutral point. */
+export function pointName(kind: PointKind, { idle }: FlownState): string {
+  return idle ? shown[kind].atIdle : shown[kind].withPower;
 }
 
 /** Text of the user's own, so that it stays text in Markdown: no markup, no line of its own. */
@@ -84,7 +96,7 @@ function stateSection(compared: ComparedState, report: FlightTestReport): string
     `## ${plain(sentence(state.name))}`,
     '',
     ...measured.flatMap((point) => [...seriesTable(point, report), '']),
-    ...neutralPointTable(measured, report.prediction),
+    ...neutralPointTable(compared, report.prediction),
     '',
     ...(all.length === 0 ? [] : [...all.map(({ code, text }) => `- **${code}** ${text}`), '']),
     ...report
@@ -118,7 +130,7 @@ function seriesTable(
   { study, prediction }: FlightTestReport,
 ): string[] {
   const { control, unit, factor, decimals } = shown[kind];
-  const predicted = kind === 'stick-fixed';
+  const predicted = prediction.of[kind];
   const speed = displayUnit('speed', study.show);
   const value = (si: number | undefined) =>
     si === undefined ? '–' : signed((si * factor).toFixed(decimals));
@@ -133,7 +145,7 @@ function seriesTable(
       value(slope?.slope),
       slope === undefined ? '–' : (slope.standardError * factor).toFixed(decimals),
       slopeUncertainty === undefined ? '–' : `± ${(slopeUncertainty * factor).toFixed(decimals)}`,
-      ...(predicted ? [value(finite(prediction.elevatorSlopeAt(cg)))] : []),
+      value(finite(predicted.lineAt(cg).slope)),
     ];
   };
   const head = [
@@ -149,7 +161,7 @@ function seriesTable(
   return [
     `${sentence(control)} positive, against C_L:`,
     '',
-    ...table([...head, ...(predicted ? ['slope predicted'] : [])], series.map(row)),
+    ...table([...head, 'slope predicted'], series.map(row)),
   ];
 }
 
@@ -162,7 +174,7 @@ function table(head: readonly string[], rows: readonly (readonly string[])[]): s
   return [line(head), `|${head.map(() => '---:').join('|')}|`, ...rows.map(line)];
 }
 
-function neutralPointTable(measured: readonly MeasuredNeutralPoint[], prediction: Prediction): string[] {
+function neutralPointTable({ state, measured }: ComparedState, prediction: Prediction): string[] {
   const head = [
     '',
     'measured [% MAC]',
@@ -171,10 +183,10 @@ function neutralPointTable(measured: readonly MeasuredNeutralPoint[], prediction
     'measured − predicted',
   ];
   const rows = measured.map(({ kind, fit }) => {
-    const predicted = kind === 'stick-fixed' ? prediction.neutralPoint : Number.NaN;
+    const predicted = prediction.of[kind].at;
     const difference = fit === undefined ? Number.NaN : fit.neutralPoint - predicted;
     return [
-      shown[kind].point,
+      pointName(kind, state),
       fit === undefined ? '–' : percent(fit.neutralPoint),
       limitsText(fit),
       Number.isNaN(predicted) ? '–' : percent(predicted),
@@ -193,8 +205,8 @@ function limitsText(fit: MeasuredNeutralPoint['fit']): string {
 function correctionBlock({ correction, state }: ComparedState, report: FlightTestReport): string[] {
   if (correction === undefined) return ['No correction is offered for this state.', ''];
   const { value, cautious, fit } = correction;
-  const { condition, neutralPoint } = report.prediction;
-  const source = `flight test (${report.data}), ${state.name}: ${percent(fit.neutralPoint)} % MAC, 95 % limits ${limitsText(fit)}; predicted ${percent(neutralPoint)} in ${condition.name}`;
+  const { condition, of } = report.prediction;
+  const source = `flight test (${report.data}), ${state.name}: ${percent(fit.neutralPoint)} % MAC, 95 % limits ${limitsText(fit)}; predicted ${percent(of['stick-fixed'].at)} in ${condition.name}`;
   return [
     `Correction for the study, to be written at its top level${state.idle ? '' : ' (measured with power on: one at idle is to be preferred)'}. By the forward 95 % limit, the cautious choice, it would be ${signed(percent(cautious))} %.`,
     '',

@@ -97,6 +97,24 @@ export function verticalPositionShift(
   return wingHeightOverChord * liftCoefficient * tilt;
 }
 
+/**
+ * What `verticalPositionShift` lacks when heights are measured square to a datum line rather than to the
+ * line of nil lift [-]: (z_w/c) (α_0 − i_w). It does not change with C_L.
+ * @param wingHeightOverChord z_w/c, the wing's aerodynamic centre above the CG square to the datum line, in MAC [-]
+ * @param zeroLiftAngle       α_0 of the root chord, twist and flaps included, to the stream [rad]
+ * @param incidence           i_w, root chord to the datum line [rad]
+ * Exact for small angles, our derivation: the force along the datum line, C_D − C_L α_d with
+ * α_d = C_L/a + α_0 − i_w, acts at the height z_w. On a high wing with camber and incidence it moves the
+ * neutral point forward; leaving it out is on the unsafe side.
+ */
+export function datumLineShift(
+  wingHeightOverChord: number,
+  zeroLiftAngle: number,
+  incidence: number,
+): number {
+  return wingHeightOverChord * (zeroLiftAngle - incidence);
+}
+
 /** Neutral point h_n [-], the sum of its build-up: wing aerodynamic centre and the steps by tail, body, height. Exact. */
 export function neutralPoint(
   wingPosition: number,

@@ -1,6 +1,8 @@
 import {
   bodyStep,
+  datumLineShift,
   neutralPoint,
+  rootAngleOfAttack,
   tailLiftShare,
   tailPosition,
   tailStep,
@@ -43,10 +45,11 @@ export function heightStage({ cg }: Pick<Study, 'cg'>): Stage {
     return {
       name: 'vertical position',
       reads: [],
-      writes: ['neutral_point_height'],
+      writes: ['neutral_point_height', 'neutral_point_height_datum'],
       cost: 1,
-      kernel: (count, _, [shift]) => {
+      kernel: (count, _, [shift, datum]) => {
         shift.fill(0, 0, count);
+        datum.fill(0, 0, count);
       },
     };
   }
@@ -61,13 +64,26 @@ export function heightStage({ cg }: Pick<Study, 'cg'>): Stage {
       'wing_lift_slope',
       'wing_aspect_ratio',
       'span_efficiency',
+      'wing_section_zero_lift_angle',
+      'wing_washout',
+      'mac_spanwise_station',
+      'wing_span',
+      'wing_incidence',
     ],
-    writes: ['neutral_point_height'],
-    cost: 10,
-    kernel: (count, [wing, rise, cgHeight, mac, cl, a, A, e], [shift]) => {
+    writes: ['neutral_point_height', 'neutral_point_height_datum'],
+    cost: 15,
+    kernel: (
+      count,
+      [wing, rise, cgHeight, mac, cl, a, A, e, zeroLift, washout, station, span, incidence],
+      [shift, datum],
+    ) => {
       for (let row = 0; row < count; row++) {
         const height = (wing[row] + rise[row] - cgHeight[row]) / mac[row];
-        shift[row] = verticalPositionShift(height, cl[row], a[row], A[row], e[row]);
+        const noLift = 0;
+        const macFraction = (2 * station[row]) / span[row];
+        const angle = rootAngleOfAttack(noLift, a[row], zeroLift[row], washout[row], macFraction);
+        datum[row] = datumLineShift(height, angle, incidence[row]);
+        shift[row] = verticalPositionShift(height, cl[row], a[row], A[row], e[row]) + datum[row];
       }
     },
   };

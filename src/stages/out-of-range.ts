@@ -18,6 +18,9 @@ export const rangeLabels = [
   'downwash by the handbook',
   'quick body estimate',
   'standard atmosphere',
+  'equivalent taper of a wing hollower than a triangle',
+  'lift slope at this Mach number',
+  'linear lift (C_L above the section’s greatest)',
 ] as const;
 
 type RangeLabel = (typeof rangeLabels)[number];
@@ -27,6 +30,9 @@ const bitOf = Object.fromEntries(rangeLabels.map((label, k) => [label, 2 ** k]))
   number
 >;
 
+/** Mach number up to which wings of ordinary thickness stay free of shocks: common practice, no source. */
+const shockFreeMach = 0.7;
+
 /** One check: the figures it reads and whether the formula is in its range. */
 interface RangeCheck {
   readonly label: RangeLabel;
@@ -34,38 +40,59 @@ interface RangeCheck {
   readonly inside: (values: readonly number[]) => boolean;
 }
 
+const checksOfEveryStudy: readonly RangeCheck[] = [
+  {
+    label: 'body carry-over',
+    reads: ['body_width_at_wing', 'wing_span'],
+    inside: ([width, span]) => bodyCarryOverInRange(width / span),
+  },
+  {
+    label: 'standard atmosphere',
+    reads: ['conditions_1_height'],
+    inside: ([height]) => insideAtmosphere(height),
+  },
+  {
+    label: 'lift slope at this Mach number',
+    reads: ['mach'],
+    inside: ([mach]) => mach <= shockFreeMach,
+  },
+  {
+    label: 'linear lift (C_L above the section’s greatest)',
+    reads: ['lift_coefficient', 'wing_section_maximum_lift'],
+    inside: ([liftCoefficient, greatest]) => liftCoefficient <= greatest,
+  },
+];
+
 /** The checks that apply to a study: those of the methods it uses. */
 function checksOf(study: Study): RangeCheck[] {
-  const { methods, tail } = study;
+  const { methods, tail, cg } = study;
   const wing = ['wing_aspect_ratio', 'wing_formula_taper', 'wing_formula_sweep'];
   const tailReads = ['tail_aspect_ratio', 'tail_taper', `tail_sweep_${tail.sweep}`];
   const tailSweep = (A: number, taper: number, sweep: number) =>
     tail.sweep === 'quarter_chord' ? sweep : Math.atan(sweepTangentAt(Math.tan(sweep), 0, 0.25, A, taper));
-  const checks: RangeCheck[] = [
-    {
-      label: 'body carry-over',
-      reads: ['body_width_at_wing', 'wing_span'],
-      inside: ([width, span]) => bodyCarryOverInRange(width / span),
-    },
-    {
-      label: 'standard atmosphere',
-      reads: ['conditions_1_height'],
-      inside: ([height]) => insideAtmosphere(height),
-    },
-  ];
-  if (methods.aerodynamic_centre === 'table' || methods.lift_slope === 'table') {
-    checks.push(
-      {
-        label: 'wing table (wing)',
-        reads: wing,
-        inside: ([A, taper, sweep]) => insideWingTable(A, taper, sweep),
-      },
-      {
-        label: 'wing table (tail)',
-        reads: tailReads,
-        inside: ([A, taper, sweep]) => insideWingTable(A, taper, tailSweep(A, taper, sweep)),
-      },
-    );
+  const checks: RangeCheck[] = [...checksOfEveryStudy];
+  const tableForBoth = methods.aerodynamic_centre === 'table' || methods.lift_slope === 'table';
+  // the vertical position takes the span efficiency from the table
+  if (tableForBoth || cg.heightGiven) {
+    checks.push({
+      label: 'wing table (wing)',
+      reads: wing,
+      inside: ([A, taper, sweep]) => insideWingTable(A, taper, sweep),
+    });
+  }
+  if (tableForBoth) {
+    checks.push({
+      label: 'wing table (tail)',
+      reads: tailReads,
+      inside: ([A, taper, sweep]) => insideWingTable(A, taper, tailSweep(A, taper, sweep)),
+    });
+  }
+  if (study.wing.form === 'panels') {
+    checks.push({
+      label: 'equivalent taper of a wing hollower than a triangle',
+      reads: ['wing_formula_taper'],
+      inside: ([taper]) => taper > 0,
+    });
   }
   if (methods.lift_slope === 'jones') {
     checks.push(
@@ -158,9 +185,8 @@ export const reasonStage: Stage = {
     for (let row = 0; row < count; row++) {
       if (Number.isNaN(wake[row])) reason[row] = 0;
       else if (Number.isNaN(body[row])) reason[row] = 1;
-      else if (forward[row] > aft[row]) reason[row] = 2;
-      else if (Number.isFinite(point[row])) reason[row] = Number.NaN;
-      else reason[row] = taper[row] === 0 ? 4 : 3;
+      else if (!Number.isFinite(point[row])) reason[row] = taper[row] === 0 ? 4 : 3;
+      else reason[row] = forward[row] > aft[row] ? 2 : Number.NaN;
     }
   },
 };

@@ -39,6 +39,8 @@ export function checkDerivedSizes(choices: Choices, baseline: Baseline, reading:
   }
 }
 
+const metres = (value: number) => `${Number(value.toFixed(3))} m`;
+
 /** The tail's place against wing and body at the fixed values. */
 export function checkTailPlace(
   choices: Choices,
@@ -49,7 +51,6 @@ export function checkTailPlace(
   const span = reading.spans.get(`tail.${choices.tail.place}`);
   const station = tail['tail.station'];
   if (!span || !Number.isFinite(station)) return;
-  const metres = (value: number) => `${Number(value.toFixed(3))} m`;
   if (tail['tail.arm'] <= 0 || station <= wing.rootTrailingEdge) {
     const found = `The tail’s quarter-MAC lies at station ${metres(station)}, not aft of the wing’s root trailing edge at ${metres(wing.rootTrailingEdge)}.`;
     reading.faults.add('TAIL_AHEAD_OF_WING', span, found, tailOrder);
@@ -97,6 +98,7 @@ export function checkVariedShape(
   checkVariedCounts(axes, reading);
   checkVariedFlaps(axes, reading);
   checkVariedLoading(axes, choices, reading);
+  checkVariedBodyEnd(axes, body, baseline, reading);
   checkVariedCg(axisOf('cg.forward'), axisOf('cg.aft'), choices, baseline, reading);
 }
 
@@ -111,6 +113,29 @@ function checkVariedTail(axes: readonly PlacedAxis[], { wing }: Baseline, readin
       reading.faults.add('TAIL_AHEAD_OF_WING', span, found, tailOrder);
       break;
     }
+  }
+}
+
+/** The last station keeps its distance from the tail, so each of its values must reach the baseline's tail. */
+function checkVariedBodyEnd(
+  axes: readonly PlacedAxis[],
+  body: BodyChoices | undefined,
+  { tail }: Baseline,
+  reading: Reading,
+): void {
+  if (!body || body.boom) return;
+  const path = `body.stations[${body.stations}].at`;
+  const axis = axes.find((one) => one.paths.includes(path));
+  if (!axis) return;
+  for (const { span, at } of rowsOf(axis, [path])) {
+    if (!(at.get(path)! < tail['tail.station'])) continue;
+    reading.faults.add(
+      'TAIL_BEYOND_BODY',
+      span,
+      `With this value the body ends ahead of the tail’s quarter-MAC at ${metres(tail['tail.station'])}.`,
+      'Leave the value out, or add boom: {width: …, depth: …}.',
+    );
+    break;
   }
 }
 

@@ -37,7 +37,7 @@ export function describeHeld(
 
 function dependantsOf(path: string, choices: Choices): Dependants | undefined {
   if (path.startsWith('tail.')) return tailDependants(path, choices);
-  if (/^wing\.(root_leading_edge|(panels\[\d+\]\.)?sweep_)/.test(path)) return placeDependants(choices);
+  if (/^wing\.(root_leading_edge|(panels\[\d+\]\.)?sweep_)/.test(path)) return placeDependants(path, choices);
   if (/^wing\.(area|span|aspect_ratio|root_chord|taper)$/.test(path)) return sizeDependants(path, choices);
   if (/^wing\.panels\[\d+\]\.(width|span_fraction|taper)$/.test(path)) return sizeDependants(path, choices);
   return undefined;
@@ -69,12 +69,15 @@ function tailDependants(path: string, choices: Choices): Dependants | undefined 
 }
 
 /** The wing moves or slides along, and its sizes stay. */
-function placeDependants(choices: Choices): Dependants {
+/** Moving the wing does not slide it along a fixed body: the stations of the body go with it. */
+const bodyRides = 'a body’s shape ahead of and over the wing (it rides with the wing)';
+
+function placeDependants(path: string, choices: Choices): Dependants {
   const { tail } = choices;
   const armFollows = ['tail.arm', ...tailSizeFollows(choices, tail.size === 'volume')];
   return {
     held: [...choices.wing.given, ...tailGiven(choices)],
-    also: cgWords(choices),
+    also: [...cgWords(choices), ...(path === 'wing.root_leading_edge' ? [bodyRides] : [])],
     follows: [
       'station of the mean aerodynamic chord',
       ...(tail.place === 'arm' ? ['tail.station'] : armFollows),

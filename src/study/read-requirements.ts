@@ -5,7 +5,7 @@ import type { FigureNames, KnownFigure } from './known-figures.ts';
 import type { QuantityKind } from './quantities.ts';
 import { allConditions, checkConditionName } from './read-conditions.ts';
 import type { Reading } from './reading.ts';
-import { keySpan, type MapEntry, mapIn, type SourceNode, valueIn, wordIn } from './source.ts';
+import { keySpan, type MapEntry, mapIn, type SourceNode, type Span, valueIn, wordIn } from './source.ts';
 import type { Band, Condition, Preference, Requirement } from './study.ts';
 
 const bandKey = 'static_margin';
@@ -21,6 +21,9 @@ const marginKind: QuantityKind = {
 /** One unit of shortfall of anything but a margin: a twentieth of the limit. */
 const shareOfLimit = 0.05;
 const smallestLimit = 1e-6;
+
+/** Failed edges stand in the table as bits of a 32-bit signed number. */
+const mostEdges = 31;
 
 export interface Requirements {
   readonly band: Band;
@@ -52,8 +55,29 @@ export function readRequirements(
       const requirement = readRequirement(key, entry, figures, reading);
       if (requirement) requirements.push(requirement);
     }
+    if (edgeCount(requirements) > mostEdges) {
+      tellTooMany(entry.key, reading);
+      break;
+    }
   }
   return { band, requirements };
+}
+
+function edgeCount(requirements: readonly Requirement[]): number {
+  return requirements.reduce(
+    (sum, { atLeast, atMost }) =>
+      sum + Math.max(1, Number(atLeast !== undefined) + Number(atMost !== undefined)),
+    0,
+  );
+}
+
+function tellTooMany(span: Span, reading: Reading): void {
+  reading.faults.add(
+    'OUT_OF_RANGE',
+    span,
+    `With this requirement the study has more than ${mostEdges} edges, at_least and at_most counted each.`,
+    'Leave out the requirements that nothing fails.',
+  );
 }
 
 function readBand(map: SourceNode, conditions: readonly Condition[], reading: Reading): Requirements {

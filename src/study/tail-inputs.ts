@@ -14,7 +14,7 @@ export const tailRows: Row[] = [
   ],
   [
     'tail.volume',
-    'V_H',
+    'V',
     'ratio',
     'Tail volume: tail area times tail arm over wing area and mean aerodynamic chord.',
     0.02,
@@ -23,7 +23,7 @@ export const tailRows: Row[] = [
   ],
   [
     'tail.arm',
-    'l_t',
+    'l',
     'length',
     'Quarter-MAC of the wing to quarter-MAC of the tail, along the datum line.',
     -60,
@@ -81,7 +81,7 @@ export const tailRows: Row[] = [
   ],
   [
     'tail.above_wing_root_chord',
-    'h_t',
+    'z_t',
     'length',
     'Height of the tail’s quarter-MAC above the plane of the wing’s root chord.',
     -20,
@@ -101,7 +101,7 @@ export const tailRows: Row[] = [
   ],
   [
     'tail.dynamic_pressure_ratio',
-    'η_t',
+    'η',
     'ratio',
     'Dynamic pressure at the tail over that of the free stream.',
     0.4,
@@ -121,7 +121,7 @@ export const tailRows: Row[] = [
   ],
   [
     'tail.elevator.span_fraction',
-    'b_e/b_t',
+    'b_δ/b_t',
     'ratio',
     'Part of the tail’s span that carries the elevator.',
     5 / hundred,
@@ -131,7 +131,7 @@ export const tailRows: Row[] = [
   ],
   [
     'tail.elevator.effectiveness_ratio',
-    'k_e',
+    'k_δ',
     'ratio',
     'Measured elevator effectiveness over that of thin-aerofoil theory.',
     0.2,

@@ -37,6 +37,13 @@ describe('the table put together', () => {
     expect([hash('cases.csv'), hash('cases.parquet')]).toEqual(before);
   });
 
+  it('is put together all the same when workers die', async () => {
+    const before = [hash('cases.csv'), hash('cases.parquet')];
+    const dying = new URL('./dying-copy-worker.mjs', import.meta.url).href;
+    await assembleTable(folder, parts(), columns, 2, dying);
+    expect([hash('cases.csv'), hash('cases.parquet')]).toEqual(before);
+  });
+
   it('a part altered meanwhile is told by number and nothing new is left', async () => {
     const found = parts();
     const before = hash('cases.csv');

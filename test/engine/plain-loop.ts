@@ -56,6 +56,7 @@ export interface PlainNumbers {
   'wing.section.lift_slope': number;
   'wing.section.zero_lift_angle': number;
   'wing.section.aerodynamic_centre': number;
+  'wing.section.maximum_lift': number;
   'tail.volume': number;
   'tail.arm': number;
   'tail.aspect_ratio': number;
@@ -175,6 +176,7 @@ const plainPaths: Record<PlainPath, true> = {
   'wing.section.lift_slope': true,
   'wing.section.zero_lift_angle': true,
   'wing.section.aerodynamic_centre': true,
+  'wing.section.maximum_lift': true,
   'tail.volume': true,
   'tail.arm': true,
   'tail.aspect_ratio': true,
@@ -266,7 +268,15 @@ const edgeTolerance = 1e-9;
 const flagsPlace = plainFigures.indexOf('outside_fitted_range');
 
 /** Bits of the formulas used outside their range, as the table's labels number them. */
-const bits = { wingTable: 1, tailTable: 2, carryOver: 16, torenbeek: 32, atmosphere: 256 } as const;
+const bits = {
+  wingTable: 1,
+  tailTable: 2,
+  carryOver: 16,
+  torenbeek: 32,
+  atmosphere: 256,
+  mach: 1024,
+  linearLift: 2048,
+} as const;
 
 /**
  * Evaluates one combination.
@@ -437,7 +447,9 @@ export function evaluatePlain(inputs: PlainInputs, out: Float64Array): void {
     (insideWingTable(tailA, tailTaper, tailSweep) ? 0 : bits.tailTable) +
     (bodyCarryOverInRange(bodyWidth / b) ? 0 : bits.carryOver) +
     (torenbeekInRange(taper, sweep, (2 * arm) / b) ? 0 : bits.torenbeek) +
-    (insideAtmosphere(height) ? 0 : bits.atmosphere);
+    (insideAtmosphere(height) ? 0 : bits.atmosphere) +
+    (mach <= 0.7 ? 0 : bits.mach) +
+    (cl <= numbers['wing.section.maximum_lift'] ? 0 : bits.linearLift);
   judge(inputs.edges, out);
 }
 

@@ -80,7 +80,8 @@ describe('with scatter', () => {
       fly({
         cgs: [0.22, 0.27, 0.32],
         speeds: [54, 58, 63, 69, 77, 88, 104],
-        elevator: (cg, lift) => 1.2 * degree + prediction.elevatorSlopeAt(cg) * lift + 0.25 * degree * next(),
+        elevator: (cg, lift) =>
+          1.2 * degree + prediction.of['stick-fixed'].lineAt(cg).slope * lift + 0.25 * degree * next(),
         force: (cg, lift) => straightForce(cg, lift) + 0.00006 * next(),
       }),
     );
@@ -94,7 +95,7 @@ describe('with scatter', () => {
   const count = (held: readonly boolean[]) => held.filter(Boolean).length;
 
   test.each([
-    ['the study’s neutral point from elevator angles', 0, prediction.neutralPoint],
+    ['the study’s neutral point from elevator angles', 0, prediction.of['stick-fixed'].at],
     ['the stick-free one from forces', 1, freeAt],
   ] as const)(
     '%s lies inside its limits in at least 90 of 100 draws, and not in all of 400',
@@ -140,7 +141,10 @@ describe('warnings', () => {
     /** Whether a correction is offered all the same. */
     readonly corrected: boolean;
   }
-  const bare = (changed: Partial<Prediction>): Prediction => ({ ...prediction, ...changed });
+  const predicting = (at: number): Prediction => ({
+    ...prediction,
+    of: { ...prediction.of, 'stick-fixed': { ...prediction.of['stick-fixed'], at } },
+  });
   const cases: readonly Case[] = [
     {
       code: 'FEWER_THAN_TWO_CGS',
@@ -233,7 +237,7 @@ describe('warnings', () => {
       code: 'POWER_ON',
       when: 'the state has power',
       flight: { power: 'full' },
-      against: bare({ condition: { ...prediction.condition, power: 'fraction' } }),
+      against: { ...prediction, condition: { ...prediction.condition, power: 'fraction' } },
       text: /not the neutral point at constant speed/,
       corrected: true,
     },
@@ -247,14 +251,14 @@ describe('warnings', () => {
     {
       code: 'NO_PREDICTION',
       when: 'the study gives none',
-      against: bare({ neutralPoint: Number.NaN }),
+      against: predicting(Number.NaN),
       text: /no neutral point at its own fixed values/,
       corrected: false,
     },
     {
       code: 'CORRECTION_TOO_LARGE',
       when: 'another aeroplane was flown',
-      against: bare({ neutralPoint: fixedAt - 0.21 }),
+      against: predicting(fixedAt - 0.21),
       text: /would be 21\.0 % MAC, and studies take 20 %/,
       corrected: false,
     },
@@ -270,7 +274,7 @@ describe('warnings', () => {
   test('none for good data', () => {
     const compared = warned(fly({ elevator: noisy(0.02) }));
     expect(all(compared)).toEqual([]);
-    expect(compared.correction!.value).toBeCloseTo(fixedAt - prediction.neutralPoint, 2);
+    expect(compared.correction!.value).toBeCloseTo(fixedAt - prediction.of['stick-fixed'].at, 2);
     expect(compared.correction!.cautious).toBeLessThan(compared.correction!.value);
   });
   test('CGs at the edges of what is close, near and far are not told of', () => {

@@ -121,6 +121,8 @@ function mayBeEmpty(found: Evaluated, figure: string, row: number): boolean {
   if (figure === 'not_computed_because' || figure === 'fails_first') return true;
   if (figure === 'cg_window_aft') return drawn.band.lower === undefined;
   if (figure === 'cg_window_forward') return drawn.band.upper === undefined;
+  // a wing hollower than a triangle has no equivalent taper
+  if (figure === 'downwash_torenbeek') return value('wing_formula_taper', row) === 0;
   const height = study.inputs.get('tail.above_wing_root_chord') ?? 0;
   return figure === 'downwash_handbook' && Math.abs(height) * 2 >= value('wing_span', row);
 }

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {
   bodyStep,
+  datumLineShift,
   fractionOfMac,
   neutralPoint,
   rootAngleOfAttack,
@@ -126,5 +127,42 @@ describe('angle of attack', () => {
     const mean = integrate((eta) => chord(eta) * eta, 0, 1) / integrate(chord, 0, 1);
     const macStation = (1 + 2 * taper) / (3 * (1 + taper));
     expect(rootAngleOfAttack(0, 5, 0, 0.05, macStation)).toBeCloseTo(0.05 * mean, 10);
+  });
+});
+
+describe('heights measured square to the datum line', () => {
+  it('agree with forces and moments written out with exact trigonometry, for small angles', () => {
+    fc.assert(
+      fc.property(
+        fc.record({
+          z: fc.double({ min: -0.3, max: 0.3, noNaN: true }),
+          lift: fc.double({ min: 0.1, max: 1, noNaN: true }),
+          slope: fc.double({ min: 4, max: 5.5, noNaN: true }),
+          ratio: fc.double({ min: 6, max: 20, noNaN: true }),
+          zeroLift: fc.double({ min: -0.06, max: 0.01, noNaN: true }),
+          incidence: fc.double({ min: -0.02, max: 0.06, noNaN: true }),
+        }),
+        ({ z, lift, slope, ratio, zeroLift, incidence }) => {
+          const e = 0.9;
+          // Nose-up moment of the force along the datum line at the height z over the CG, wing at the CG's station.
+          const moment = (cl: number) => {
+            const angle = cl / slope + zeroLift - incidence;
+            const drag = cl ** 2 / (Math.PI * ratio * e);
+            return z * (drag * Math.cos(angle) - cl * Math.sin(angle));
+          };
+          const step = 1e-5;
+          const measured = -(moment(lift + step) - moment(lift - step)) / (2 * step);
+          const ours =
+            verticalPositionShift(z, lift, slope, ratio, e) + datumLineShift(z, zeroLift, incidence);
+          // Small angles: the cubic of the sine is what is left.
+          expect(Math.abs(ours - measured)).toBeLessThan(0.05 * Math.abs(z) + 1e-9);
+        },
+      ),
+    );
+  });
+
+  it('cost a high wing with camber and incidence part of its shift', () => {
+    expect(datumLineShift(0.3, -0.06, 0.04)).toBeCloseTo(-0.03, 12);
+    expect(datumLineShift(-0.3, -0.06, 0.04)).toBeCloseTo(0.03, 12);
   });
 });

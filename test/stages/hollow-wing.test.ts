@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { reasonLabels } from '../../src/stages/out-of-range.ts';
+import { rangeLabels, reasonLabels } from '../../src/stages/out-of-range.ts';
 import { columnOf, evaluateAll, planOf } from '../engine/evaluate-all.ts';
 import { testStudy } from '../studies.ts';
 
@@ -13,9 +13,10 @@ const figures = [
   'downwash_handbook',
   'neutral_point',
   'not_computed_because',
+  'outside_fitted_range',
 ];
-const rowOf = (rest: string) => {
-  const columns = evaluateAll(planOf(testStudy({ wing, rest })), figures);
+const rowOf = (rest: string, vary = '') => {
+  const columns = evaluateAll(planOf(testStudy({ wing, rest, vary })), figures);
   return Object.fromEntries(figures.map((name) => [name, columnOf(columns, name)[0]]));
 };
 
@@ -29,10 +30,17 @@ describe('a wing hollower than a triangle', () => {
     expect(reasonLabels[row.not_computed_because]).toContain('hollower than a triangle');
   });
 
-  it('is worked out by the handbook form', () => {
+  it('is told before a CG range that is reversed as well', () => {
+    const row = rowOf('', 'cg.forward: [0.35]\ncg.aft: [0.3]');
+    expect(reasonLabels[row.not_computed_because]).toContain('hollower than a triangle');
+  });
+
+  it('is worked out by the handbook form, and flagged', () => {
     const row = rowOf('methods: {downwash: handbook}');
     expect(row.not_computed_because).toBeNaN();
     expect(row.neutral_point).toBeGreaterThan(0);
+    const bit = rangeLabels.indexOf('equivalent taper of a wing hollower than a triangle');
+    expect(Math.floor(row.outside_fitted_range / 2 ** bit) % 2).toBe(1);
     expect(row.downwash_torenbeek).toBeNaN();
   });
 });

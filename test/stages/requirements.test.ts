@@ -234,9 +234,21 @@ describe('formulas outside their fitted range', () => {
       'methods: {downwash: handbook}',
       [0, bit('wing table (wing)')],
     ],
+    [
+      'conditions[1].speed: [40 kt, 60 kt, 110 kt]',
+      '',
+      [bit('linear lift (C_L above the section’s greatest)'), 0, 0],
+    ],
+    ['conditions[1].speed: [420 kt, 430 kt]', '', [0, bit('lift slope at this Mach number')]],
     ['wing.taper: [0.15]', 'methods: {aerodynamic_centre: quarter_mac, downwash: handbook}', [0]],
   ])('%s %s', (vary, rest, expected) => {
     expect(flags({ vary, rest })).toEqual(expected);
+  });
+
+  it('the table is asked for the span efficiency where the CG has a height', () => {
+    const rest = 'methods: {aerodynamic_centre: quarter_mac, downwash: handbook}';
+    const cg = '{as: percent_mac, forward: 24 %, aft: 33 %, above_datum: 0.2 m}';
+    expect(flags({ vary: 'wing.taper: [0.15, 0.2]', rest, cg })).toEqual([bit('wing table (wing)'), 0]);
   });
 
   it('body carry-over and quick estimate', () => {

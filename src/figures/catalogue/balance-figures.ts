@@ -8,7 +8,7 @@ export const balanceFigures = {
     'I_f',
     'volume',
     'Body ahead of the root leading edge, in the wing’s upwash.',
-    'I_f = ∫w² (1+u) dx',
+    'I_f = ∫w² (1+u) dx, x ahead of the root leading edge, X = x + c_r/4, s = πb/8, Γ = 2aS/(πb): u = (Γ/4π)(2s/(X√(s²+X²)) − (2/s)(1 − X/√(X²+s²))) + (a/2π)(√(1+c_r/x) − 1 − c_r/(2X))',
     'Multhopp, NACA TM 1036; upwash ours',
   ),
   body_moment_aft: entry(
@@ -163,8 +163,15 @@ export const balanceFigures = {
     'Δh_z',
     'fraction_of_mac',
     'Build-up of the neutral point: wing above or below the CG, at the condition’s lift; 0 unless the study gives the height of the CG.',
-    'Δh_z = (z_w/c) C_L (2/a − 2/(πAe)), z_w = wing height + z_c − CG height',
+    'Δh_z = ((z_w + z_c − z_cg)/c) C_L (2/a − 2/(πAe)) + Δh_z0',
     'derived from the tilt of lift and induced drag',
+  ),
+  neutral_point_height_datum: entry(
+    'Δh_z0',
+    'fraction_of_mac',
+    'Part of Δh_z that comes from heights being measured square to the datum line, not to the line of nil lift.',
+    'Δh_z0 = ((z_w + z_c − z_cg)/c) (α_L0 + ε_t · 2y_c/b − i_w)',
+    'derived from the tilt of the lift, ours',
   ),
   neutral_point: entry(
     'h_n',

@@ -40,14 +40,14 @@ export const tailFigures = {
     'a_t',
     'per_angle',
     'Lift-curve slope of the tail alone; of a V-tail for its lift in the vertical, cos²Γ included.',
-    'a_t as a, with the tail’s own A_t, λ_t, Λ_t, a_0,t',
+    'a_t as a, with the tail’s own A_t, λ_t, Λ_t, a_0_t',
     polhamus,
   ),
   tail_aerodynamic_centre: entry(
     'h_ac,t',
     'fraction_of_mac',
     'Aerodynamic centre of the tail, fraction of its own MAC.',
-    'as h_ac, with the tail’s own A_t, λ_t, Λ_t',
+    'h_ac,t from the wing table at A_t, λ_t, Λ_t, + x_ac_t/c − ¼',
     ours,
   ),
   elevator_effectiveness: entry(
@@ -68,7 +68,7 @@ export const tailFigures = {
     'α_r',
     'angle',
     'Angle of attack of the root chord at the condition’s lift.',
-    'α_r = C_L/a + α_L0 + washout · 2y_c/b',
+    'α_r = C_L/a + α_L0 + ε_t · 2y_c/b',
     'strip mean of the twist, ours',
   ),
   wing_lift_slope_ratio: entry(
@@ -96,7 +96,7 @@ export const tailFigures = {
     'ε_α,H',
     'ratio',
     'Downwash gradient at the tail, handbook form.',
-    'ε_α,H = 4.44 (K_A K_λ K_H √cos Λ_e)^1.19 a(M)/a(0)',
+    'ε_α,H = 4.44 (K_A K_λ K_H √cos Λ_e)^1.19 a(M)/a(0), K_A = 1/A − 1/(1+A^1.7), K_λ = (10−3λ_e)/7, K_H = (1−|z_t/b|)/(2l/b)^⅓',
     'handbook form, from memory',
   ),
   downwash_gradient: entry(

@@ -182,7 +182,7 @@ export const wingFigures = {
     'h_quarter',
     'fraction_of_mac',
     'Aerodynamic centre of the wing taken at the quarter point of the MAC.',
-    'h_quarter = ¼ + x_ac/c − ¼',
+    'h_quarter = x_ac/c',
     'common practice, no source',
   ),
   wing_aerodynamic_centre: entry(

@@ -1,0 +1,4 @@
+/** A worker that dies of every task. */
+export default function die() {
+  process.exit(7);
+}
