@@ -40,7 +40,7 @@ export function sharesStage(study: PowerStudy): Stage {
 }
 
 /** Effect of the wing's height over the CG; nothing when the study does not give the CG's height. */
-export function heightStage({ cg }: Pick<Study, 'cg'>): Stage {
+export function heightStage({ cg, flaps }: Pick<Study, 'cg' | 'flaps'>): Stage {
   if (!cg.heightGiven) {
     return {
       name: 'vertical position',
@@ -69,19 +69,21 @@ export function heightStage({ cg }: Pick<Study, 'cg'>): Stage {
       'mac_spanwise_station',
       'wing_span',
       'wing_incidence',
+      ...(flaps === undefined ? [] : ['flap_zero_lift_change']),
     ],
     writes: ['neutral_point_height', 'neutral_point_height_datum'],
     cost: 15,
     kernel: (
       count,
-      [wing, rise, cgHeight, mac, cl, a, A, e, zeroLift, washout, station, span, incidence],
+      [wing, rise, cgHeight, mac, cl, a, A, e, zeroLift, washout, station, span, incidence, byFlaps],
       [shift, datum],
     ) => {
       for (let row = 0; row < count; row++) {
         const height = (wing[row] + rise[row] - cgHeight[row]) / mac[row];
         const noLift = 0;
         const macFraction = (2 * station[row]) / span[row];
-        const angle = rootAngleOfAttack(noLift, a[row], zeroLift[row], washout[row], macFraction);
+        const section = zeroLift[row] + (byFlaps === undefined ? 0 : byFlaps[row]);
+        const angle = rootAngleOfAttack(noLift, a[row], section, washout[row], macFraction);
         datum[row] = datumLineShift(height, angle, incidence[row]);
         shift[row] = verticalPositionShift(height, cl[row], a[row], A[row], e[row]) + datum[row];
       }
