@@ -54,6 +54,7 @@ const worksheetOnly: ReadonlySet<FigureName> = new Set<FigureName>([
   'neutral_point_rest',
 
   'wing_formula_sweep_half_chord',
+  'neutral_point_height_lift',
   'neutral_point_height_datum',
   'body_moment_forward',
   'body_moment_aft',

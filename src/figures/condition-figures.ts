@@ -27,6 +27,7 @@ const conditionFigures: ReadonlySet<string> = new Set([
   'neutral_point_tail',
   'neutral_point_body',
   'neutral_point_height',
+  'neutral_point_height_lift',
   'neutral_point_height_datum',
   'neutral_point',
   'neutral_point_station',

@@ -14,7 +14,7 @@ import { pressureRatioFigure } from './propeller.ts';
 import type { Stage } from './stage.ts';
 
 /** Figures that the couples at another lift than the condition's are made of. */
-const coupleReads = ['rest_couples', 'neutral_point_height', 'lift_coefficient'] as const;
+const coupleReads = ['rest_couples', 'neutral_point_height_lift', 'lift_coefficient'] as const;
 
 /**
  * Couples beside the lift of all but the tail at another lift: height by the wing's lift, thrust by the

@@ -45,11 +45,10 @@ export function heightStage({ cg, flaps }: Pick<Study, 'cg' | 'flaps'>): Stage {
     return {
       name: 'vertical position',
       reads: [],
-      writes: ['neutral_point_height', 'neutral_point_height_datum'],
+      writes: ['neutral_point_height', 'neutral_point_height_lift', 'neutral_point_height_datum'],
       cost: 1,
-      kernel: (count, _, [shift, datum]) => {
-        shift.fill(0, 0, count);
-        datum.fill(0, 0, count);
+      kernel: (count, _, outputs) => {
+        for (const output of outputs) output.fill(0, 0, count);
       },
     };
   }
@@ -71,12 +70,12 @@ export function heightStage({ cg, flaps }: Pick<Study, 'cg' | 'flaps'>): Stage {
       'wing_incidence',
       ...(flaps === undefined ? [] : ['flap_zero_lift_change']),
     ],
-    writes: ['neutral_point_height', 'neutral_point_height_datum'],
+    writes: ['neutral_point_height', 'neutral_point_height_lift', 'neutral_point_height_datum'],
     cost: 15,
     kernel: (
       count,
       [wing, rise, cgHeight, mac, cl, a, A, e, zeroLift, washout, station, span, incidence, byFlaps],
-      [shift, datum],
+      [shift, byLift, datum],
     ) => {
       for (let row = 0; row < count; row++) {
         const height = (wing[row] + rise[row] - cgHeight[row]) / mac[row];
@@ -85,7 +84,8 @@ export function heightStage({ cg, flaps }: Pick<Study, 'cg' | 'flaps'>): Stage {
         const section = zeroLift[row] + (byFlaps === undefined ? 0 : byFlaps[row]);
         const angle = rootAngleOfAttack(noLift, a[row], section, washout[row], macFraction);
         datum[row] = datumLineShift(height, angle, incidence[row]);
-        shift[row] = verticalPositionShift(height, cl[row], a[row], A[row], e[row]) + datum[row];
+        byLift[row] = verticalPositionShift(height, cl[row], a[row], A[row], e[row]);
+        shift[row] = byLift[row] + datum[row];
       }
     },
   };

@@ -38,7 +38,7 @@ function coupleSlopeStage(study: Study, { power }: Condition): Stage {
   const running = study.propeller !== undefined && power === 'fraction';
   return {
     name: 'slope of the couples',
-    reads: ['neutral_point_height', ...(running ? ['thrust_moment', 'lift_coefficient'] : [])],
+    reads: ['neutral_point_height_lift', ...(running ? ['thrust_moment', 'lift_coefficient'] : [])],
     writes: ['couple_slope'],
     cost: 3,
     kernel: (count, [byHeight, byThrust, cl], [slope]) => {
@@ -51,7 +51,7 @@ function coupleSlopeStage(study: Study, { power }: Condition): Stage {
 }
 
 /**
- * The balance of moments: the neutral point without the step by height, the place of all but the tail, the
+ * The balance of moments: the neutral point without the step by height that grows with lift, the place of all but the tail, the
  * moment at nil lift, and the couples that act beside the lift of all but the tail.
  */
 function balanceStage({ propeller }: Study): Stage {
@@ -60,7 +60,7 @@ function balanceStage({ propeller }: Study): Stage {
     name: 'balance of moments',
     reads: [
       'neutral_point',
-      'neutral_point_height',
+      'neutral_point_height_lift',
       'lift_slope',
       'tail_lift_share',
       'tail_position',
@@ -141,7 +141,7 @@ function tailLiftStage(study: Study): Stage {
       'rest_couples',
       'rest_position',
       'tail_position',
-      'neutral_point_height',
+      'neutral_point_height_lift',
       pressureRatioFigure(study),
       'tail_area',
       'wing_area',

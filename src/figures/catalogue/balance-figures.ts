@@ -166,6 +166,13 @@ export const balanceFigures = {
     'Δh_z = ((z_w + z_c − z_cg)/c) C_L (2/a − 2/(πAe)) + Δh_z0',
     'derived from the tilt of lift and induced drag',
   ),
+  neutral_point_height_lift: entry(
+    'Δh_zL',
+    'fraction_of_mac',
+    'Part of Δh_z that grows with the lift.',
+    'Δh_zL = ((z_w + z_c − z_cg)/c) C_L (2/a − 2/(πAe))',
+    'derived from the tilt of lift and induced drag',
+  ),
   neutral_point_height_datum: entry(
     'Δh_z0',
     'fraction_of_mac',
