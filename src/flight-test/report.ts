@@ -231,6 +231,8 @@ const method = [
   '- Stick fixed: dδ/dC_L = (h − h_n)/(C_Lδ (h_t − h_n)), exact for linear parts. A least-squares line for each CG; the slopes are linear in h, and reach zero at h_n.',
   '- Stick free: P/q = K (h − h_n′)(C_L − C_L,trim), exact for linear parts with the trim tab left alone at each CG (ours, from the hinge moment; the slope of P/q against C_L is the usual one of flight-test practice, from memory). A spring or bobweight is in h_n′ as it acts at the flown weight.',
   '- One fit of all points of a state: an intercept for each CG, slopes linear in h, one scatter. 95 % limits by Fieller (1954, from memory) with Student’s t; they are not symmetrical. Errors of speed, mass and CG that are common to all points are not in them.',
+  '- Along a curve the wake sinks and its downwash changes, so curves are never quite straight: in the model of our test aeroplane, flown without scatter, the extrapolated point lies 0.7 % MAC ahead of the neutral point at the condition’s own speed.',
+  '- A predicted slope is that of the study at the condition’s speed.',
   '- A correction is for the aeroplane as it was flown; other states and variants differ.',
   '- Local airworthiness rules and licensed practice decide.',
   '',
