@@ -3,11 +3,12 @@
  * its shared stages against the same formulas one combination at a time.
  */
 
+import { readFileSync } from 'node:fs';
 import { Evaluator } from '../../src/engine/evaluator.ts';
 import { layOut } from '../../src/engine/lay-out.ts';
 import type { Plan } from '../../src/plan/plan.ts';
 import { blockCount, blockSize } from '../../src/plan/plan.ts';
-import { readStudyFile } from '../../src/read-study-file.ts';
+import { readStudyFile, readStudyText } from '../../src/read-study-file.ts';
 import type { Study } from '../../src/study/study.ts';
 import type { PlainInputs } from '../engine/plain-loop.ts';
 import { evaluatePlain, isPlainPath, plainFigures, plainInputs } from '../engine/plain-loop.ts';
@@ -20,7 +21,20 @@ let consumed = 0;
 
 /** The tourer without its skip rule, so that both ways do the same combinations. */
 function tourer(): Study {
+  return { ...readStudyFile('test/plain-tourer.yaml'), skip: [] };
+}
+
+/** The demo tourer: four conditions, power, flaps, loading, trim and the forward limit. */
+function wholeTourer(): Study {
   return { ...readStudyFile('studies/coastal-tourer.yaml'), skip: [] };
+}
+
+/** The demo tourer with the tail area chosen in each combination so that the aft margin is 8 %. */
+function sizedTourer(): Study {
+  const text = readFileSync('studies/coastal-tourer.yaml', 'utf8')
+    .replace(/^ {2}tail\.volume: .*\n/m, '')
+    .concat('\nsize: {choose: tail.volume, so_that: static_margin_aft, is: 8 %, between: [0.2, 1.2]}\n');
+  return { ...readStudyText(text, 'sized-tourer.yaml'), skip: [] };
 }
 
 /** A study whose every number varies along one axis of random points: nothing can be shared. */
@@ -145,6 +159,20 @@ export async function benchEvaluation(): Promise<BenchRow[]> {
       engineJob(`evaluation, ${name}, engine`, study, 'shared stages'),
       plainJob(`evaluation, ${name}, plain loop`, study, 'one combination at a time'),
     ]),
+  );
+  rows.push(
+    ...(await measure([
+      engineJob(
+        'evaluation, whole tourer, engine',
+        wholeTourer(),
+        'four conditions, power, flaps, loading, trim',
+      ),
+      engineJob(
+        'evaluation, sized tourer, engine',
+        sizedTourer(),
+        'the same, tail volume chosen for 8 % margin',
+      ),
+    ])),
   );
   if (!Number.isFinite(consumed)) throw new Error('a margin was not computed');
   return rows;

@@ -31,7 +31,7 @@ const columns = [
 
 /** The tourer with its tail arm cut finer to about the number of combinations wanted. */
 function studyText(combinations: number): string {
-  const text = readFileSync('studies/coastal-tourer.yaml', 'utf8');
+  const text = readFileSync('test/plain-tourer.yaml', 'utf8');
   const others = 14 * 6 * 4 * 13 * 5;
   const arms = Math.max(2, Math.round(combinations / others));
   return text

@@ -84,7 +84,7 @@ function neededSettings(plan: Plan, stage: number, keeps: (digits: readonly numb
 
 describe('each stage only as often as it must', () => {
   it('on the tourer without skips: once for each setting of its own axes', () => {
-    const { plan, rows, evaluate } = counted({ ...readStudyFile('studies/coastal-tourer.yaml'), skip: [] });
+    const { plan, rows, evaluate } = counted({ ...readStudyFile('test/plain-tourer.yaml'), skip: [] });
     expect(evaluate()).toBe(plan.combinations);
     plan.stages.forEach((stage, k) => {
       expect(rows[k], stage.name).toBe(settings(plan, k));
@@ -101,7 +101,7 @@ describe('each stage only as often as it must', () => {
   });
 
   it('on the tourer with its skips: not at all for what is wholly left out', () => {
-    const study = readStudyFile('studies/coastal-tourer.yaml');
+    const study = readStudyFile('test/plain-tourer.yaml');
     const { plan, rows, evaluate } = counted(study);
     const kept = evaluate();
     const keeps = (digits: readonly number[]) =>
