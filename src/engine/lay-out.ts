@@ -2,6 +2,7 @@ import { figureNames, isWorksheetOnly } from '../figures/catalogue.ts';
 import { conditionFigureName } from '../figures/condition-figures.ts';
 import { tableColumn } from '../figures/display.ts';
 import type { Figure, TableColumn } from '../figures/figure.ts';
+import { sizeOutcomeFigure } from '../figures/size-outcomes.ts';
 import { figureOfInput, figuresOfStudy } from '../figures/study-figures.ts';
 import type { Plan } from '../plan/plan.ts';
 import { makePlan } from '../plan/plan.ts';
@@ -75,13 +76,15 @@ function tableFigureNames(study: Study, plan: Plan): string[] {
     !(ofLoading.includes(name) && plan.fixed.has(name));
   const results = figureNames.filter(isColumn);
   const workedOut = (name: string) => name === combinationFigure || plan.axesOfFigure.has(name);
-  const all = [...new Set([combinationFigure, ...varied, ...results, ...ofConditions(study)])].filter(
-    workedOut,
-  );
+  const chosen = study.size === undefined ? [] : [figureOfInput(study)(study.size.path), sizeOutcomeFigure];
+  const all = [
+    ...new Set([combinationFigure, ...varied, ...chosen, ...results, ...ofConditions(study)]),
+  ].filter(workedOut);
   if (study.columns === undefined) return all;
   const wanted = new Set([
     ...alwaysKept,
     ...varied,
+    ...chosen,
     ...study.columns,
     ...study.preferences.map((preference) => preference.figure),
   ]);

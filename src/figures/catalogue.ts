@@ -2,6 +2,7 @@ import { balanceFigures } from './catalogue/balance-figures.ts';
 import { controlFigures, tabledControlFigures } from './catalogue/control-figures.ts';
 import { type Entry, entry, sources } from './catalogue/entry.ts';
 import { loadingFigures } from './catalogue/loading-figures.ts';
+import { sizingFigures } from './catalogue/sizing-figures.ts';
 import { tailFigures } from './catalogue/tail-figures.ts';
 import { verdictFigures } from './catalogue/verdict-figures.ts';
 import { wingFigures } from './catalogue/wing-figures.ts';
@@ -25,6 +26,7 @@ const entries = {
   ...loadingFigures,
   ...balanceFigures,
   ...controlFigures,
+  ...sizingFigures,
   ...verdictFigures,
 } as const satisfies Record<string, Entry>;
 

@@ -1,10 +1,12 @@
-import type { Study } from '../study/study.ts';
+import type { Sizing, Study } from '../study/study.ts';
 import type { FigureName } from './catalogue.ts';
 import { catalogueFigure, figureNames } from './catalogue.ts';
 import { conditionFigureName, isConditionFigure } from './condition-figures.ts';
 import { controlLimitKinds } from './control-limit-kinds.ts';
+import { showValue } from './display.ts';
 import type { Figure } from './figure.ts';
 import { inputFigure, inputFigureName } from './input-figures.ts';
+import { sizeOutcomeFigure, sizeOutcomes } from './size-outcomes.ts';
 
 type Wording = Partial<Pick<Figure, 'formula' | 'source'>>;
 
@@ -100,6 +102,8 @@ function labelsOf(name: FigureName, labels: StudyLabels, { loading }: Study): re
     case 'governing_condition_aft':
     case 'governing_condition_forward':
       return labels.conditions;
+    case sizeOutcomeFigure:
+      return sizeOutcomes;
     case 'cg_forward_case':
     case 'cg_aft_case':
       return loading?.cases.map((one) => one.name);
@@ -126,7 +130,18 @@ export function figuresOfStudy(study: Study, labels: StudyLabels): Map<string, F
     for (const own of figuresOfConditions(figure, study)) figures.set(own.name, own);
     figures.set(name, figure);
   }
+  if (study.size !== undefined) tellChosen(figures, study, study.size);
   return figures;
+}
+
+/** The number that sizing chooses is given no longer. */
+function tellChosen(figures: Map<string, Figure>, study: Study, size: Sizing): void {
+  const name = figureOfInput(study)(size.path);
+  const chosen = figures.get(name);
+  const reached = figures.get(size.figure);
+  if (chosen === undefined || reached === undefined) return;
+  const value = showValue(size.value, reached.dimension, study.show);
+  figures.set(name, { ...chosen, formula: `${chosen.symbol} so that ${reached.symbol} = ${value}` });
 }
 
 /** With several conditions, a figure as each of them has it. */

@@ -37,6 +37,8 @@ export interface Plan {
 export interface PlanInput {
   readonly axes: readonly Axis[];
   readonly inputs: Study['inputs'];
+  /** The number that it names is worked out in each combination: no input. */
+  readonly size?: Study['size'];
 }
 
 /**
@@ -49,7 +51,7 @@ export function makePlan(
   figureOfInput: (path: string) => string,
 ): Plan {
   const authorAxes = study.axes.map((axis) => planAxis(axis, figureOfInput));
-  const inputs = new Set([...study.inputs.keys()].map(figureOfInput));
+  const inputs = new Set(givenPaths(study).map(figureOfInput));
   const sizes = authorAxes.map((axis) => axis.size);
   const authored = axesOfStages(stages, inputs, positionsByFigure(authorAxes));
   const order = orderAxes(
@@ -67,6 +69,10 @@ export function makePlan(
     axesOfStage: ofStage,
     axesOfFigure: ofFigure,
   };
+}
+
+function givenPaths({ inputs, size }: PlanInput): string[] {
+  return [...inputs.keys()].filter((path) => path !== size?.path);
 }
 
 function planAxis(axis: Axis, figureOfInput: (path: string) => string): PlanAxis {
@@ -89,9 +95,10 @@ function fixedInputs(
 ): Map<string, number> {
   const varied = new Set(axes.flatMap((axis) => axis.figures));
   const fixed = new Map<string, number>();
-  for (const [path, value] of study.inputs) {
+  for (const path of givenPaths(study)) {
     const figure = figureOfInput(path);
-    if (!varied.has(figure)) fixed.set(figure, value);
+    const value = study.inputs.get(path);
+    if (value !== undefined && !varied.has(figure)) fixed.set(figure, value);
   }
   return fixed;
 }

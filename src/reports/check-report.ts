@@ -1,5 +1,6 @@
 import type { LaidOut } from '../engine/lay-out.ts';
 import { showValue } from '../figures/display.ts';
+import { figureOfInput } from '../figures/study-figures.ts';
 import { baselineInputs } from '../stages/build-stages.ts';
 import type { RequirementEdge } from '../stages/requirements.ts';
 import { runOnce } from '../stages/run-once.ts';
@@ -62,6 +63,7 @@ export function checkReport({
           `${varied}: held ${held.join(', ') || 'nothing'}; follows ${follows.join(', ') || 'nothing'}`,
       ),
     ),
+    ...section('Sized in every combination', sizingLines(study, laidOut)),
     ...section('Assumed, because the study does not say', assumptionLines(study, laidOut)),
     ...section('Required', [
       `static-margin band: ${bandText(study.band)}`,
@@ -85,8 +87,18 @@ function requirementText(
   { figures }: LaidOut,
 ): string {
   const figure = figures.get(name);
+  if (figure?.kind === 'choice') return `${label}: ${name} is '${figure.labels?.[limit] ?? limit}'`;
   const text = figure?.kind === 'number' ? showValue(limit, figure.dimension, study.show) : String(limit);
   return `${label}: ${name} ${sign === 1 ? '≥' : '≤'} ${text}`;
+}
+
+/** `tail_area: S_t so that K_aft = 8.00 % MAC, between 0.600 m² and 2.500 m²`. */
+function sizingLines(study: Study, { figures }: LaidOut): string[] {
+  const { size } = study;
+  const figure = size && figures.get(figureOfInput(study)(size.path));
+  if (size === undefined || figure === undefined) return [];
+  const [from, to] = [size.from, size.to].map((end) => showValue(end, figure.dimension, study.show));
+  return [`${figure.name}: ${figure.formula}, between ${from} and ${to}`];
 }
 
 function axisLines(study: Study, laidOut: LaidOut): string[] {

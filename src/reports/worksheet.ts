@@ -2,9 +2,11 @@ import type { LaidOut } from '../engine/lay-out.ts';
 import { edgeTolerance } from '../figures/band.ts';
 import { displayUnit } from '../figures/display.ts';
 import type { Figure } from '../figures/figure.ts';
+import { figureOfInput } from '../figures/study-figures.ts';
 import { digitsOf } from '../plan/plan.ts';
 import { baselineInputs } from '../stages/build-stages.ts';
 import { runOnce } from '../stages/run-once.ts';
+import { withNumberGiven } from '../stages/sizing.ts';
 import type { ShowSystem, Study } from '../study/study.ts';
 import { cautions } from './cautions.ts';
 
@@ -76,7 +78,15 @@ export function baselineWorksheet(
   const inputs = new Map([...baselineInputs(study), ...replaced]);
   const subject =
     replaced.size === 0 ? 'the baseline' : `the baseline with ${[...replaced.keys()].join(', ')} replaced`;
-  return makeWorksheet(study, laidOut, inputs, subject);
+  return makeWorksheet(study, withReplacedGiven(study, laidOut, replaced), inputs, subject);
+}
+
+/** A number that sizing chooses is given where it is among those replaced. */
+function withReplacedGiven(study: Study, laidOut: LaidOut, replaced: ReadonlyMap<string, number>): LaidOut {
+  const { size } = study;
+  if (size === undefined || !replaced.has(figureOfInput(study)(size.path))) return laidOut;
+  const { plan } = laidOut;
+  return { ...laidOut, plan: { ...plan, stages: withNumberGiven(plan.stages) } };
 }
 
 function worksheetRow(figure: Figure, value: number, show: ShowSystem): WorksheetRow {

@@ -20,6 +20,7 @@ import { rangeStages, reasonStage } from './out-of-range.ts';
 import { propellerShareStages, propellerStages, tailStreamStages } from './propeller.ts';
 import { requirementEdges, requirementsStage } from './requirements.ts';
 import { runOnce } from './run-once.ts';
+import { withSizing } from './sizing.ts';
 import { skipStage } from './skip.ts';
 import type { Stage } from './stage.ts';
 import {
@@ -48,7 +49,7 @@ export function buildStages(study: Study, control = assessesControl(study)): Sta
     ...(control ? controlStages(study, condition) : []),
     ...rangeStages(study),
   ]);
-  return [
+  const stages = [
     ...skip,
     ...placeStages(study),
     wingCentreStage(study),
@@ -66,9 +67,12 @@ export function buildStages(study: Study, control = assessesControl(study)): Sta
     ...governingStages(study, ofConditions.common),
     ...(control ? controlLimitStages(study) : []),
     windowStage(study, control),
-    reasonStage,
+    reasonStage(study),
     requirementsStage(requirementEdges(study)),
   ];
+  return study.size === undefined
+    ? stages
+    : withSizing(stages, study.size, figureOfInput(study)(study.size.path));
 }
 
 /** Stages of one flight condition. */
@@ -121,14 +125,21 @@ function placeStages(study: Study): Stage[] {
   return [wingPlanformStage(study), wingStationsStage, tailPlaceStage(study)];
 }
 
-/** Input figures of the baseline: every number at the value that the study itself gives. */
+/** Input figures of the baseline: every number at the value that the study itself gives, but for one that is worked out. */
 export function baselineInputs(study: Study): Map<string, number> {
+  const inputs = numbersOf(study);
+  if (study.size !== undefined) inputs.delete(figureOfInput(study)(study.size.path));
+  return inputs;
+}
+
+/** Every number in the study file. */
+function numbersOf(study: Study): Map<string, number> {
   const figureName = figureOfInput(study);
   return new Map([...study.inputs].map(([path, value]) => [figureName(path), value]));
 }
 
 function baselinePlaces(study: Study): BaselinePlaces {
-  const figures = runOnce(placeStages(study), baselineInputs(study));
+  const figures = runOnce(placeStages(study), numbersOf(study));
   const value = (name: string) => figures.get(name) ?? Number.NaN;
   return {
     rootLeadingEdge: value('wing_root_leading_edge'),

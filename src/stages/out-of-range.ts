@@ -1,3 +1,4 @@
+import { sizeOutcomeFigure, sizeOutcomes } from '../figures/size-outcomes.ts';
 import { insideAtmosphere } from '../methods/atmosphere.ts';
 import { quickBodyMomentInRange } from '../methods/body-estimates.ts';
 import { handbookInRange, torenbeekInRange } from '../methods/downwash.ts';
@@ -173,20 +174,38 @@ export const reasonLabels = [
   'the forward CG lies aft of the aft CG',
   'the neutral point is not finite',
   'the wing is hollower than a triangle: it has no equivalent taper',
+  ...sizeOutcomes.slice(1).map((outcome) => `sizing: ${outcome}`),
 ] as const;
 
-/** Writes the reason's index, or an empty cell where neutral point and margins were worked out. */
-export const reasonStage: Stage = {
-  name: 'reasons',
-  reads: ['wake_length', 'body_moment_aft', 'neutral_point', 'cg_forward', 'cg_aft', 'wing_formula_taper'],
-  writes: ['not_computed_because'],
-  cost: 2,
-  kernel: (count, [wake, body, point, forward, aft, taper], [reason]) => {
-    for (let row = 0; row < count; row++) {
-      if (Number.isNaN(wake[row])) reason[row] = 0;
-      else if (Number.isNaN(body[row])) reason[row] = 1;
-      else if (!Number.isFinite(point[row])) reason[row] = taper[row] === 0 ? 4 : 3;
-      else reason[row] = forward[row] > aft[row] ? 2 : Number.NaN;
-    }
-  },
-};
+/** Reasons before those of sizing. */
+const ofGeometry = reasonLabels.length - (sizeOutcomes.length - 1);
+
+/**
+ * Writes the reason's index, or an empty cell where neutral point and margins were worked out. A number that
+ * sizing did not find is the first of all reasons: what follows from it is empty too.
+ */
+export function reasonStage({ size }: Pick<Study, 'size'>): Stage {
+  const reads = [
+    'wake_length',
+    'body_moment_aft',
+    'neutral_point',
+    'cg_forward',
+    'cg_aft',
+    'wing_formula_taper',
+  ];
+  return {
+    name: 'reasons',
+    reads: size === undefined ? reads : [...reads, sizeOutcomeFigure],
+    writes: ['not_computed_because'],
+    cost: 2,
+    kernel: (count, [wake, body, point, forward, aft, taper, outcome], [reason]) => {
+      for (let row = 0; row < count; row++) {
+        if (outcome !== undefined && outcome[row] > 0) reason[row] = ofGeometry + outcome[row] - 1;
+        else if (Number.isNaN(wake[row])) reason[row] = 0;
+        else if (Number.isNaN(body[row])) reason[row] = 1;
+        else if (!Number.isFinite(point[row])) reason[row] = taper[row] === 0 ? 4 : 3;
+        else reason[row] = forward[row] > aft[row] ? 2 : Number.NaN;
+      }
+    },
+  };
+}

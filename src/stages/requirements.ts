@@ -1,11 +1,12 @@
 import { bandRequirements, edgeTolerance, marginScale } from '../figures/band.ts';
+import { sizeOutcomeFigure } from '../figures/size-outcomes.ts';
 import type { Band, Requirement, Study } from '../study/study.ts';
 import type { Stage } from './stage.ts';
 
 /** Stands for the flags of formulas used outside their fitted range. */
 const inRange = 'in_range';
 const flagsFigure = 'outside_fitted_range';
-/** Flags are there or not: whichever formulas they name, they weigh as one unit of shortfall. */
+/** Flags and outcomes are as they should be or not: whatever they name, they weigh as one unit of shortfall. */
 const flagsShortfall = 1;
 
 /** One edge that a combination must keep: value ≥ limit (`sign` 1) or value ≤ limit (`sign` −1). */
@@ -20,9 +21,13 @@ export interface RequirementEdge {
   readonly scale: number;
 }
 
-/** All edges of a study, in the order of its file, which settles ties. */
-export function requirementEdges({ requirements }: Pick<Study, 'requirements'>): RequirementEdge[] {
-  return requirements.flatMap(({ name, figure, atLeast, atMost, scale }): RequirementEdge[] => {
+/** All edges of a study, in the order of its file, which settles ties; first that its sizing has a solution. */
+export function requirementEdges({
+  requirements,
+  size,
+}: Pick<Study, 'requirements' | 'size'>): RequirementEdge[] {
+  const solved: RequirementEdge = { label: 'size', figure: sizeOutcomeFigure, sign: -1, limit: 0, scale: 1 };
+  const required = requirements.flatMap(({ name, figure, atLeast, atMost, scale }): RequirementEdge[] => {
     if (figure === inRange) return [{ label: name, figure: flagsFigure, sign: -1, limit: 0, scale }];
     const ofBand = name === bandRequirements.lower.name || name === bandRequirements.upper.name;
     const label = (edge: string) => (ofBand ? name : `${name}.${edge}`);
@@ -35,6 +40,7 @@ export function requirementEdges({ requirements }: Pick<Study, 'requirements'>):
         : [{ label: label('at_most'), figure, sign: -1 as const, limit: atMost, scale }]),
     ];
   });
+  return size === undefined ? required : [solved, ...required];
 }
 
 /** A study's requirements with its band replaced by another. */
@@ -62,7 +68,8 @@ export function requirementsStage(edges: readonly RequirementEdge[]): Stage {
       failsFirst.fill(Number.NaN, 0, count);
       for (let e = 0; e < edges.length; e++) {
         const { figure, sign, limit, scale } = edges[e];
-        const most = figure === flagsFigure ? flagsShortfall : Number.POSITIVE_INFINITY;
+        const most =
+          figure === flagsFigure || figure === sizeOutcomeFigure ? flagsShortfall : Number.POSITIVE_INFINITY;
         const values = inputs[e];
         const bit = 2 ** e;
         for (let row = 0; row < count; row++) {
