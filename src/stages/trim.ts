@@ -51,8 +51,8 @@ function coupleSlopeStage(study: Study, { power }: Condition): Stage {
 }
 
 /**
- * The balance of moments: the neutral point without the step by height that grows with lift, the place of all but the tail, the
- * moment at nil lift, and the couples that act beside the lift of all but the tail.
+ * The balance of moments: the neutral point without the step by height that grows with lift, the place of
+ * all but the tail, the moment at nil lift, and the couples that act beside the lift of all but the tail.
  */
 function balanceStage({ propeller }: Study): Stage {
   const powered = propeller !== undefined;
