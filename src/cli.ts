@@ -100,7 +100,10 @@ function flightTestCommand(parser: Argv) {
         .option('study', neededTextOption('study', 'study file or run folder of the flown aeroplane'))
         .option(
           'condition',
-          textOption('condition', 'flight condition of the prediction (default: the first)'),
+          textOption(
+            'condition',
+            'flight condition of the prediction (default: the first that has the flown power and flaps)',
+          ),
         )
         .option('to', textOption('to', 'file for the report; it must not be there yet'))
         .option('chart', textOption('chart', 'folder to draw the charts into')),

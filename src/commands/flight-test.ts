@@ -1,9 +1,9 @@
 import { basename, dirname, join, relative } from 'node:path';
 import { flightTestSlopes, renderChart } from '../charts/index.ts';
 import { flightTestChartData } from '../flight-test/chart-data.ts';
-import { type ComparedState, compareState } from '../flight-test/compare.ts';
+import { type ComparedState, compareState, conditionOf } from '../flight-test/compare.ts';
 import { measureState } from '../flight-test/measure.ts';
-import { type Prediction, predict } from '../flight-test/predict.ts';
+import { predict } from '../flight-test/predict.ts';
 import { readFlownPoints } from '../flight-test/read-data.ts';
 import { flightTestMarkdown } from '../flight-test/report.ts';
 import { flownStates } from '../flight-test/states.ts';
@@ -34,18 +34,20 @@ export async function flightTest({
 }: FlightTestArguments): Promise<void> {
   if (to !== undefined) checkNewFile(to);
   const study = readStudyOf(path);
-  const prediction = predict(study, conditionNamed(study, condition));
-  const points = await readFlownPoints(data, prediction.wing);
-  const states = flownStates(points).map((state) => compareState(state, measureState(state), prediction));
+  const named = condition === undefined ? undefined : conditionNamed(study, condition);
+  const { wing } = predict(study, named ?? study.conditions[0]!);
+  const points = await readFlownPoints(data, wing);
+  const states = flownStates(points).map((state) => {
+    const prediction = predict(study, named ?? conditionOf(state, study.conditions));
+    return compareState(state, measureState(state), prediction);
+  });
   const pictures =
-    chart === undefined
-      ? new Map<ComparedState, string[]>()
-      : await drawStates(states, study, prediction, chart, to);
+    chart === undefined ? new Map<ComparedState, string[]>() : await drawStates(states, study, chart, to);
   const markdown = flightTestMarkdown({
     study,
     data: basename(data),
     points,
-    prediction,
+    wing,
     states,
     picturesOf: (state) => pictures.get(state) ?? [],
   });
@@ -56,8 +58,7 @@ export async function flightTest({
   }
 }
 
-function conditionNamed({ conditions }: Study, name: string | undefined): Condition {
-  if (name === undefined) return conditions[0]!;
+function conditionNamed({ conditions }: Study, name: string): Condition {
   const found = conditions.find((condition) => condition.name === name);
   if (found !== undefined) return found;
   const names = conditions.map((condition) => condition.name);
@@ -68,7 +69,6 @@ function conditionNamed({ conditions }: Study, name: string | undefined): Condit
 async function drawStates(
   states: readonly ComparedState[],
   study: Study,
-  prediction: Prediction,
   folder: string,
   report: string | undefined,
 ): Promise<Map<ComparedState, string[]>> {
@@ -80,7 +80,7 @@ async function drawStates(
     for (const measured of compared.measured) {
       const title = `Flight test: ${compared.state.name}`;
       const heading = { title, study: study.title, date, program: of };
-      const data = flightTestChartData(measured, compared.state, prediction, heading);
+      const data = flightTestChartData(measured, compared, heading);
       if (data === undefined) continue;
       const name = ['flight-test', index + 1, slug(compared.state.name), measured.kind].join('-');
       await renderChart(name, flightTestSlopes(data), folder);

@@ -1,9 +1,9 @@
 /** Data of the flight-test chart: trailing edge up and pull upward, as in the other charts of control. */
 import type { ChartHeading, FlightTestSlopesData, FlownCg } from '../charts/index.ts';
+import type { ComparedState } from './compare.ts';
 import type { FlownSeries, MeasuredNeutralPoint } from './measure.ts';
-import type { PredictedLine, Prediction } from './predict.ts';
+import type { PredictedLine } from './predict.ts';
 import { controlFactor, pointName } from './report.ts';
-import type { FlownState } from './states.ts';
 
 const titles = {
   'stick-fixed': {
@@ -23,8 +23,7 @@ const titles = {
  */
 export function flightTestChartData(
   { kind, series, fit }: MeasuredNeutralPoint,
-  state: FlownState,
-  prediction: Prediction,
+  { state, prediction }: ComparedState,
   heading: ChartHeading,
 ): FlightTestSlopesData | undefined {
   const factor = (kind === 'stick-fixed' ? -1 : 1) * controlFactor(kind);

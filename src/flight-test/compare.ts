@@ -1,4 +1,5 @@
 /** Measured against predicted: what a study should be corrected by. */
+import type { Condition } from '../study/study.ts';
 import type { MeasuredNeutralPoint, SoundFit } from './measure.ts';
 import type { Prediction } from './predict.ts';
 import type { FlownState } from './states.ts';
@@ -8,6 +9,7 @@ import type { Warning, WarningCode } from './warnings.ts';
 export interface ComparedState {
   readonly state: FlownState;
   readonly measured: readonly MeasuredNeutralPoint[];
+  readonly prediction: Prediction;
   /** Absent where data and study do not give one that a study can take. */
   readonly correction?: Correction;
   /** Of the comparison; those of the measurement are with it. */
@@ -32,7 +34,7 @@ export function compareState(
 ): ComparedState {
   const warnings = conditionWarnings(state, prediction);
   const fit = measured.find(({ kind }) => kind === 'stick-fixed')?.sound;
-  const compared = { state, measured, warnings };
+  const compared = { state, measured, prediction, warnings };
   const predicted = prediction.of['stick-fixed'].at;
   if (Number.isNaN(predicted)) return withWarning(compared, 'NO_PREDICTION', noPrediction);
   // A difference between two states would be taken for an error of the estimate.
@@ -52,8 +54,20 @@ function withWarning(compared: ComparedState, code: WarningCode, text: string): 
   return { ...compared, warnings: [...compared.warnings, { code, text }] };
 }
 
-/** Whether the condition of the prediction is that of the flown state, as far as words tell. */
-function conditionWarnings({ idle, flapsDown }: FlownState, { condition }: Prediction): Warning[] {
+/** The first condition that agrees with a state in power and flaps, as far as words tell; else the first of all. */
+export function conditionOf(state: FlownState, conditions: readonly Condition[]): Condition {
+  return conditions.find((condition) => differences(state, condition).length === 0) ?? conditions[0]!;
+}
+
+function conditionWarnings(state: FlownState, { condition }: Prediction): Warning[] {
+  const apart = differences(state, condition);
+  if (apart.length === 0) return [];
+  const text = `The prediction is for the condition ${condition.name}: ${apart.join('; ')}. Name the one that was flown with --condition, or add it to the study; till then there is no correction.`;
+  return [{ code: 'CONDITION_DIFFERS', text }];
+}
+
+/** In what a condition is not that of the flown state, as far as words tell. */
+function differences({ idle, flapsDown }: FlownState, condition: Condition): string[] {
   const apart: string[] = [];
   if (idle !== (condition.power === 'idle')) {
     apart.push(
@@ -65,7 +79,5 @@ function conditionWarnings({ idle, flapsDown }: FlownState, { condition }: Predi
       `it was flown with flaps ${flapsDown ? 'down' : 'up'}, and the condition has them ${flapsDown ? 'up' : 'down'}`,
     );
   }
-  if (apart.length === 0) return [];
-  const text = `The prediction is for the condition ${condition.name}: ${apart.join('; ')}. Name the one that was flown with --condition; till then there is no correction.`;
-  return [{ code: 'CONDITION_DIFFERS', text }];
+  return apart;
 }

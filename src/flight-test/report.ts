@@ -4,7 +4,7 @@ import type { Study } from '../study/study.ts';
 import type { ComparedState } from './compare.ts';
 import type { FlownSeries, MeasuredNeutralPoint, PointKind } from './measure.ts';
 import type { Prediction } from './predict.ts';
-import type { FlownPoint } from './read-data.ts';
+import type { FlownPoint, FlownWing } from './read-data.ts';
 import type { FlownState } from './states.ts';
 import type { Warning } from './warnings.ts';
 
@@ -13,7 +13,7 @@ export interface FlightTestReport {
   /** File name of the data, without its folder. */
   readonly data: string;
   readonly points: readonly FlownPoint[];
-  readonly prediction: Prediction;
+  readonly wing: FlownWing;
   readonly states: readonly ComparedState[];
   /** Pictures of a state, as paths to put into the text. */
   readonly picturesOf: (state: ComparedState) => readonly string[];
@@ -71,15 +71,15 @@ export function plain(text: string): string {
 }
 
 export function flightTestMarkdown(report: FlightTestReport): string {
-  const { study, data, points, prediction, states } = report;
-  const { area, mac, macLeadingEdge } = prediction.wing;
+  const { study, data, points, states } = report;
+  const { area, mac, macLeadingEdge } = report.wing;
   const length = (value: number) => showValue(value, 'length', study.show);
   return [
     `# ${plain(study.title)}: flight test`,
     '',
     `**${flightTestCaution}**`,
     '',
-    `${points.length} points of ${plain(data)}, in ${states.length} state${states.length === 1 ? '' : 's'}. The study's own fixed values are taken for the flown aeroplane: wing area ${showValue(area, 'area', study.show)}, MAC ${length(mac)}, its leading edge at station ${length(macLeadingEdge)}. Predictions are for the condition ${plain(prediction.condition.name)}${study.corrections === undefined ? '' : "; the study's own correction is left out of them"}.`,
+    `${points.length} points of ${plain(data)}, in ${states.length} state${states.length === 1 ? '' : 's'}. The study's own fixed values are taken for the flown aeroplane: wing area ${showValue(area, 'area', study.show)}, MAC ${length(mac)}, its leading edge at station ${length(macLeadingEdge)}.${study.corrections === undefined ? '' : " The study's own correction is left out of what it predicts."}`,
     '',
     ...states.flatMap((state) => stateSection(state, report)),
     ...method,
@@ -87,7 +87,7 @@ export function flightTestMarkdown(report: FlightTestReport): string {
 }
 
 function stateSection(compared: ComparedState, report: FlightTestReport): string[] {
-  const { state, measured, warnings } = compared;
+  const { state, measured, prediction, warnings } = compared;
   const all = [
     ...warnings,
     ...measured.flatMap((point) => point.warnings.map((warning) => ofKind(warning, point, measured))),
@@ -95,8 +95,8 @@ function stateSection(compared: ComparedState, report: FlightTestReport): string
   return [
     `## ${plain(sentence(state.name))}`,
     '',
-    ...measured.flatMap((point) => [...seriesTable(point, report), '']),
-    ...neutralPointTable(compared, report.prediction),
+    ...measured.flatMap((point) => [...seriesTable(point, prediction, report.study), '']),
+    ...neutralPointTable(compared),
     '',
     ...(all.length === 0 ? [] : [...all.map(({ code, text }) => `- **${code}** ${text}`), '']),
     ...report
@@ -105,7 +105,7 @@ function stateSection(compared: ComparedState, report: FlightTestReport): string
         `![Measured curves and slopes, ${plain(state.name)}](<${path.replaceAll(/[<>\n]/g, '')}>)`,
         '',
       ]),
-    ...correctionBlock(compared, report),
+    ...correctionBlock(compared, report.data),
   ];
 }
 
@@ -125,10 +125,7 @@ function ofKind(
 const percent = (fraction: number) => (100 * fraction).toFixed(1);
 const signed = (text: string) => (Number(text) > 0 ? `+${text}` : text.replace(/^-(?=0\.?0*$)/, ''));
 
-function seriesTable(
-  { kind, series }: MeasuredNeutralPoint,
-  { study, prediction }: FlightTestReport,
-): string[] {
+function seriesTable({ kind, series }: MeasuredNeutralPoint, prediction: Prediction, study: Study): string[] {
   const { control, unit, factor, decimals } = shown[kind];
   const predicted = prediction.of[kind];
   const speed = displayUnit('speed', study.show);
@@ -174,7 +171,7 @@ function table(head: readonly string[], rows: readonly (readonly string[])[]): s
   return [line(head), `|${head.map(() => '---:').join('|')}|`, ...rows.map(line)];
 }
 
-function neutralPointTable({ state, measured }: ComparedState, prediction: Prediction): string[] {
+function neutralPointTable({ state, measured, prediction }: ComparedState): string[] {
   const head = [
     '',
     'measured [% MAC]',
@@ -202,11 +199,11 @@ function limitsText(fit: MeasuredNeutralPoint['fit']): string {
 }
 
 /** A block that a study can take as it stands. */
-function correctionBlock({ correction, state }: ComparedState, report: FlightTestReport): string[] {
+function correctionBlock({ correction, state, prediction }: ComparedState, data: string): string[] {
   if (correction === undefined) return ['No correction is offered for this state.', ''];
   const { value, cautious, fit } = correction;
-  const { condition, of } = report.prediction;
-  const source = `flight test (${report.data}), ${state.name}: ${percent(fit.neutralPoint)} % MAC, 95 % limits ${limitsText(fit)}; predicted ${percent(of['stick-fixed'].at)} in ${condition.name}`;
+  const { condition, of } = prediction;
+  const source = `flight test (${data}), ${state.name}: ${percent(fit.neutralPoint)} % MAC, 95 % limits ${limitsText(fit)}; predicted ${percent(of['stick-fixed'].at)} in ${condition.name}`;
   return [
     `Correction for the study, to be written at its top level${state.idle ? '' : ' (measured with power on: one at idle is to be preferred)'}. By the forward 95 % limit, the cautious choice, it would be ${signed(percent(cautious))} %.`,
     '',

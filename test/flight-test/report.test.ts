@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { flightTestChartData } from '../../src/flight-test/chart-data.ts';
-import { compareState } from '../../src/flight-test/compare.ts';
+import { compareState, conditionOf } from '../../src/flight-test/compare.ts';
 import { measureState } from '../../src/flight-test/measure.ts';
 import { predict } from '../../src/flight-test/predict.ts';
 import type { FlownPoint } from '../../src/flight-test/read-data.ts';
@@ -8,14 +8,14 @@ import { flightTestCaution, flightTestMarkdown } from '../../src/flight-test/rep
 import { flownStates } from '../../src/flight-test/states.ts';
 import { baselineInputs, buildStages } from '../../src/stages/build-stages.ts';
 import { runOnce } from '../../src/stages/run-once.ts';
-import type { Study } from '../../src/study/study.ts';
+import type { Condition, Study } from '../../src/study/study.ts';
 import { type StudyParts, testStudy } from '../studies.ts';
 import { degree, fixedAt, fly, freeAt, straightElevator, straightForce } from './flown.ts';
 
 function reportOf(points: readonly FlownPoint[], study: Study = testStudy(), data = 'flown.csv'): string {
   const prediction = predict(study, study.conditions[0]!);
   const states = flownStates(points).map((state) => compareState(state, measureState(state), prediction));
-  return flightTestMarkdown({ study, data, points, prediction, states, picturesOf: () => [] });
+  return flightTestMarkdown({ study, data, points, wing: prediction.wing, states, picturesOf: () => [] });
 }
 
 function block(markdown: string): string {
@@ -83,7 +83,7 @@ describe('the correction', () => {
     const again = testStudy({ rest: "corrections: {neutral_point: -3 %, source: 'an earlier flight'}\n" });
     const markdown = reportOf(fly(), again);
     expect(block(markdown)).toBe(block(reportOf(fly())));
-    expect(markdown).toContain("the study's own correction is left out");
+    expect(markdown).toContain("The study's own correction is left out");
   });
   test('is told by the forward limit, too', () => {
     const points = fly({
@@ -146,14 +146,39 @@ describe('the prediction', () => {
   });
 });
 
+test('each state is compared with the first condition that has its power and flaps, else with the first', () => {
+  const condition = (name: string, power: 'idle' | 'fraction', flapsDown: boolean): Condition => {
+    return { name, speedAs: 'speed', power, flapsDown, groundEffect: false };
+  };
+  const conditions = [
+    condition('cruise', 'fraction', false),
+    condition('climb', 'fraction', false),
+    condition('glide', 'idle', false),
+    condition('approach', 'idle', true),
+  ];
+  const states = flownStates(
+    [fly(), fly({ power: '65 %' }), fly({ flaps: '30°' }), fly({ flaps: '30°', power: 'full' })].flat(),
+  );
+  expect(states.map((state) => conditionOf(state, conditions).name)).toEqual([
+    'glide',
+    'cruise',
+    'approach',
+    'cruise',
+  ]);
+  const silent = flownStates(fly().map(({ flaps: _, ...point }) => point));
+  expect(conditionOf(silent[0]!, conditions.toReversed()).name).toBe('approach');
+});
+
 describe('the chart’s data', () => {
   const study = testStudy();
   const prediction = predict(study, study.conditions[0]!);
   const heading = { title: 'Flight test', study: study.title, date: '2026-12-01', program: 'aftlimit' };
-  const [state] = flownStates(fly({ force: straightForce }));
-  const [fixed, free] = measureState(state!).map((one) =>
-    flightTestChartData(one, state!, prediction, heading),
-  );
+  const chartsOf = (points: readonly FlownPoint[]) => {
+    const [state] = flownStates(points);
+    const compared = compareState(state!, measureState(state!), prediction);
+    return compared.measured.map((one) => flightTestChartData(one, compared, heading));
+  };
+  const [fixed, free] = chartsOf(fly({ force: straightForce }));
 
   test('have trailing edge up and pull upward, in degrees, N/kPa and % MAC', () => {
     expect(fixed!.flown[0]).toMatchObject({
@@ -169,10 +194,8 @@ describe('the chart’s data', () => {
     expect(free!.measuredTitle).toMatch(/pull \[N\/kPa\]/);
   });
   test('leave out the limits where they are open, and are none without a slope', () => {
-    const [one] = flownStates(fly({ cgs: [0.25], speeds: [60, 70] }));
-    expect(flightTestChartData(measureState(one!)[0]!, one!, prediction, heading)).toBeUndefined();
-    const [alone] = flownStates(fly({ cgs: [0.25] }));
-    const data = flightTestChartData(measureState(alone!)[0]!, alone!, prediction, heading);
+    expect(chartsOf(fly({ cgs: [0.25], speeds: [60, 70] }))).toEqual([undefined]);
+    const [data] = chartsOf(fly({ cgs: [0.25] }));
     expect(data).toMatchObject({ slopeLine: null, neutralPoint: null });
     expect(data!.flown.length).toBe(1);
   });
