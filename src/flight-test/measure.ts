@@ -96,7 +96,7 @@ function measure(
   if (!state.idle) {
     warn(
       'POWER_ON',
-      'With power on the thrust line and the slipstream bend the curve as well: what is found is the CG at which the control goes flat against speed (trim slope limit), not the neutral point at constant speed. A correction is better taken from a state at idle.',
+      'With power on the thrust line and the slipstream bend the curve as well: what is found is the CG at which the control goes flat against speed (trim slope limit, force slope limit), not the neutral point at constant speed. A correction is better taken from a state at idle.',
     );
   }
   const { limits } = fit;

@@ -39,7 +39,7 @@ const shown: Readonly<
     control: 'elevator, trailing edge down',
     unit: '°',
     atIdle: 'stick-fixed neutral point',
-    withPower: 'trim slope limit, stick fixed',
+    withPower: 'trim slope limit',
   },
   'stick-free': {
     factor: perKilopascal,
@@ -47,7 +47,7 @@ const shown: Readonly<
     control: 'stick force over dynamic pressure, pull',
     unit: 'N/kPa',
     atIdle: 'stick-free neutral point',
-    withPower: 'trim slope limit, stick free',
+    withPower: 'force slope limit',
   },
 };
 
