@@ -138,7 +138,8 @@ function numbersOf(study: Study): Map<string, number> {
   return new Map([...study.inputs].map(([path, value]) => [figureName(path), value]));
 }
 
-function baselinePlaces(study: Study): BaselinePlaces {
+/** Where wing and tail stand with the numbers of the study file, around which the body is drawn. */
+export function baselinePlaces(study: Study): BaselinePlaces {
   const figures = runOnce(placeStages(study), numbersOf(study));
   const value = (name: string) => figures.get(name) ?? Number.NaN;
   return {

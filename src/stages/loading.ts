@@ -1,7 +1,8 @@
-import { bodyStationPlace } from '../methods/body-stations.ts';
-import { loadingExtremes, loadingFigure, loadingFigureCount } from '../methods/loading.ts';
-import type { LoadingChoices, LoadingItem, Study } from '../study/study.ts';
+import { loadingFigure, loadingFigureCount } from '../methods/loading.ts';
+import type { LoadingChoices, Study } from '../study/study.ts';
 import type { BaselinePlaces } from './body.ts';
+import type { CaseItems } from './loading-items.ts';
+import { Aboard, casesOf, ItemReader } from './loading-items.ts';
 import type { Stage } from './stage.ts';
 
 type LoadedStudy = Pick<Study, 'loading' | 'inputs' | 'body' | 'cg'>;
@@ -22,171 +23,26 @@ export function loadingStages(study: LoadedStudy, places: BaselinePlaces): Stage
   ];
 }
 
-/** Reads mass and one more number (a place or a height) of the empty aeroplane and of every item, one after the other. */
-class ItemReader {
-  readonly reads: readonly string[];
-  /** Of the items in the file's order [kg]. */
-  readonly masses: Float64Array;
-  /** The other number of each item. */
-  readonly others: Float64Array;
-  emptyMass = 0;
-  emptyOther = 0;
-  private readonly first: number;
-
-  constructor(
-    private readonly loading: LoadingChoices,
-    emptyOther: string,
-    itemOther: (item: LoadingItem) => string,
-  ) {
-    const empty = loading.empty ? ['loading_empty_mass', `loading_empty_${emptyOther}`] : [];
-    this.first = empty.length;
-    this.reads = [
-      ...empty,
-      ...loading.items.flatMap((item, index) => {
-        const figure = `loading_items_${index + 1}`;
-        return [`${figure}_mass`, `${figure}_${itemOther(item)}`];
-      }),
-    ];
-    this.masses = new Float64Array(loading.items.length);
-    this.others = new Float64Array(loading.items.length);
-  }
-
-  read(inputs: readonly Float64Array[], row: number): void {
-    const { masses, others, first } = this;
-    if (this.loading.empty) {
-      this.emptyMass = inputs[0][row];
-      this.emptyOther = inputs[1][row];
-    }
-    for (let i = 0; i < masses.length; i++) {
-      masses[i] = inputs[first + 2 * i][row];
-      others[i] = inputs[first + 2 * i + 1][row];
-    }
-  }
-}
-
-/** Items aboard of one case, and those of them that burn in their order; positions from 0. */
-interface CaseItems {
-  readonly aboard: Int32Array;
-  readonly burning: Int32Array;
-}
-
-function casesOf({ cases, items }: LoadingChoices): CaseItems[] {
-  return cases.map((one) => {
-    const aboard = one.items.map((number) => number - 1);
-    return {
-      aboard: Int32Array.from(aboard),
-      burning: Int32Array.from(aboard.filter((position) => items[position].burns)),
-    };
-  });
-}
-
-/** What an item's `at` is a fraction of: a station to start from and a length. */
-const carriers = ['wing', 'tail', 'body'] as const;
-type Carrier = (typeof carriers)[number];
-
-function carrierReads(carrier: Carrier, body: Study['body']): string[] {
-  switch (carrier) {
-    case 'wing':
-      return ['mac_leading_edge', 'mac'];
-    case 'tail':
-      return ['tail_station', 'tail_mac'];
-    case 'body':
-      return [
-        'body_stations_1_at',
-        `body_stations_${body?.stations}_at`,
-        'wing_root_leading_edge',
-        'wing_root_chord',
-        'tail_station',
-      ];
-  }
-}
-
-/** Kind of each item's place: an index into `carriers`, or −1 for a station. */
-function carrierIndices(items: readonly LoadingItem[]): Int8Array {
-  return Int8Array.from(items, ({ carriedBy }) =>
-    carriedBy === 'station' ? -1 : carriers.indexOf(carriedBy),
-  );
-}
-
 /** Foremost and aftmost CG over all cases, at every break of what burns in them. */
 function travelStage(loading: LoadingChoices, body: Study['body'], places: BaselinePlaces): Stage {
-  const reader = new ItemReader(loading, 'station', (item) =>
-    item.carriedBy === 'station' ? 'station' : 'at',
-  );
-  const cases = casesOf(loading);
-  const carried = carrierIndices(loading.items);
-  const used = carriers.filter((carrier) => loading.items.some((item) => item.carriedBy === carrier));
-  const reads = [...reader.reads];
-  const firstRead = carriers.map((carrier) => {
-    if (!used.includes(carrier)) return -1;
-    const first = reads.length;
-    reads.push(...carrierReads(carrier, body));
-    return first;
-  });
-  const [wing, tail, hull] = firstRead;
-  const bodyEnd = bodyEndRule(body, places);
-  const starts = new Float64Array(carriers.length);
-  const lengths = new Float64Array(carriers.length);
-  const changes = new Float64Array(loading.items.length);
-  const stations = new Float64Array(loading.items.length);
+  const aboard = new Aboard(loading, body, places);
+  const { cases } = aboard;
   const extremes = new Float64Array(loadingFigureCount);
-
-  /** Station and length of whatever carries items, in one row. */
-  const readCarriers = (inputs: readonly Float64Array[], row: number) => {
-    if (wing >= 0) {
-      starts[0] = inputs[wing][row];
-      lengths[0] = inputs[wing + 1][row];
-    }
-    if (tail >= 0) {
-      lengths[1] = inputs[tail + 1][row];
-      starts[1] = inputs[tail][row] - lengths[1] / 4;
-    }
-    if (hull >= 0) {
-      starts[2] = inputs[hull][row];
-      const end = bodyEnd(
-        inputs[hull + 1][row],
-        inputs[hull + 2][row],
-        inputs[hull + 3][row],
-        inputs[hull + 4][row],
-      );
-      lengths[2] = end - starts[2];
-    }
-  };
-  const stationOf = (item: number) => {
-    const carrier = carried[item];
-    const place = reader.others[item];
-    return carrier < 0 ? place : starts[carrier] + place * lengths[carrier];
-  };
-  const walk = ({ aboard, burning }: CaseItems) => {
-    let mass = reader.emptyMass;
-    let moment = reader.emptyMass * reader.emptyOther;
-    for (let k = 0; k < aboard.length; k++) {
-      mass += reader.masses[aboard[k]];
-      moment += reader.masses[aboard[k]] * stationOf(aboard[k]);
-    }
-    for (let k = 0; k < burning.length; k++) {
-      changes[k] = -reader.masses[burning[k]];
-      stations[k] = stationOf(burning[k]);
-    }
-    loadingExtremes(mass, moment / mass, burning.length, changes, stations, extremes);
-  };
-
   return {
     name: 'loading',
-    reads,
+    reads: aboard.reads,
     writes: ['cg_forward_station', 'cg_aft_station', 'cg_forward_case', 'cg_aft_case'],
     cost: 20 * cases.length + 5 * loading.items.length,
     kernel: (count, inputs, [forward, aft, forwardCase, aftCase]) => {
       for (let row = 0; row < count; row++) {
-        reader.read(inputs, row);
-        readCarriers(inputs, row);
+        aboard.read(inputs, row);
         let foremost = Number.POSITIVE_INFINITY;
         let aftmost = Number.NEGATIVE_INFINITY;
         let foremostCase = 0;
         let aftmostCase = 0;
         // A case without a CG leaves the range unknown: NaN is never overtaken.
         for (let k = 0; k < cases.length && !Number.isNaN(foremost); k++) {
-          walk(cases[k]);
+          aboard.extremes(cases[k], extremes);
           if (!(extremes[loadingFigure.foremost] >= foremost)) {
             foremost = extremes[loadingFigure.foremost];
             foremostCase = k;
@@ -203,27 +59,6 @@ function travelStage(loading: LoadingChoices, body: Study['body'], places: Basel
         aftCase[row] = unknown ? Number.NaN : aftmostCase;
       }
     },
-  };
-}
-
-/**
- * Station of the body's last end in a combination, by the rule that stretches the body. The nose keeps
- * its own station, so that a wing that is moved along the body leaves it where it is.
- */
-function bodyEndRule(body: Study['body'], places: BaselinePlaces) {
-  const boom = body?.boom ?? false;
-  return (last: number, rootLeadingEdge: number, rootChord: number, tail: number): number => {
-    const behind = last - places.rootLeadingEdge;
-    const place = bodyStationPlace(
-      behind,
-      places.rootChord,
-      places.tail - places.rootLeadingEdge,
-      behind,
-      rootChord,
-      tail - rootLeadingEdge,
-      boom,
-    );
-    return rootLeadingEdge + place;
   };
 }
 

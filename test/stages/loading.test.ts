@@ -3,7 +3,8 @@ import { describe, expect, it } from 'vitest';
 import { layOut } from '../../src/engine/lay-out.ts';
 import { evaluateSlice } from '../../src/engine/slice.ts';
 import { readStudyText } from '../../src/read-study-file.ts';
-import { buildStages } from '../../src/stages/build-stages.ts';
+import { baselinePlaces, buildStages } from '../../src/stages/build-stages.ts';
+import { loadingPaths } from '../../src/stages/loading-paths.ts';
 import type { Study } from '../../src/study/study.ts';
 import type { StudyParts } from '../studies.ts';
 import { studyText } from '../studies.ts';
@@ -269,5 +270,35 @@ describe('masses that something carries', () => {
     const heavier = moved(study, 'loading.items[2].mass', 24, ['cg_aft_station', 'mass']);
     expect(figure(heavier, 'mass')).toBeCloseTo(total + 10, close);
     expect(figure(heavier, 'cg_aft_station')).toBeGreaterThan(figure(figures, 'cg_aft_station'));
+  });
+});
+
+describe('paths of loading cases', () => {
+  it('go through the breaks of the burn in order, between the extremes', () => {
+    const study = loadedStudy();
+    const figures = figuresOf(study);
+    const paths = loadingPaths(study.loading!, study.body, baselinePlaces(study), figures);
+    expect(paths.empty).toEqual({ mass: 372, station: 2.06 });
+    expect(paths.cases.map((states) => states.length)).toEqual([1, 3, 3]);
+    const travel = plainTravel();
+    paths.cases.flat().forEach(({ station }, k) => {
+      expect(station).toBeCloseTo(travel[k].cg, close);
+    });
+    expect(paths.cases[2].map(({ mass }) => mass)).toEqual([623, 580, 549]);
+    const stations = paths.cases.flat().map(({ station }) => station);
+    expect(figure(figures, 'cg_forward_station')).toBeCloseTo(Math.min(...stations), close);
+    expect(figure(figures, 'cg_aft_station')).toBeCloseTo(Math.max(...stations), close);
+  });
+
+  it('count what is aboard in every case into the empty aeroplane', () => {
+    const study = loadedStudy(carried);
+    const { empty: bare, cases: paths } = loadingPaths(
+      study.loading!,
+      study.body,
+      baselinePlaces(study),
+      figuresOf(study),
+    );
+    expect(bare.mass).toBeCloseTo(260 + 70 + 14 + 61, close);
+    expect(paths[0][0].mass).toBeCloseTo(bare.mass + 90, close);
   });
 });

@@ -1,6 +1,7 @@
 import type { ChartSpec } from '../../charts/index.ts';
 import {
   carpetPlot,
+  loadingDiagram,
   macRuler,
   marginAlongAxis,
   neutralPointBuildUp,
@@ -13,6 +14,7 @@ import type { PlanAxis } from '../../plan/plan.ts';
 import type { RunView } from '../run-view.ts';
 import { alongAxisData } from './along-axis-data.ts';
 import { carpetAxes, carpetData, carpetFigure } from './carpet-data.ts';
+import { loadingDiagramData } from './loading-diagram-data.ts';
 import { buildUpData, macRulerData, picksOf } from './pick-data.ts';
 import { planViewData } from './plan-view-data.ts';
 import { regionData } from './region-data.ts';
@@ -38,6 +40,11 @@ export async function* chartsOf(view: RunView, carpet?: CarpetChoice): AsyncGene
   yield { name: 'mac-ruler', spec: macRuler(macRulerData(view, picks)) };
   yield { name: 'neutral-point-build-up', spec: neutralPointBuildUp(buildUpData(view, picks)) };
   yield { name: 'plan-views', spec: planView(planViewData(view, picks)) };
+
+  const { loading } = view.study;
+  if (loading !== undefined) {
+    yield { name: 'loading-diagram', spec: loadingDiagram(loadingDiagramData(view, loading, picks[0])) };
+  }
 
   const { plan } = view.laidOut;
   const varied = plan.authorOrder.map((position) => plan.axes[position]).filter((axis) => axis.size > 1);
