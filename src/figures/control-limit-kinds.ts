@@ -4,3 +4,5 @@ export const controlLimitKinds = [
   { figure: 'forward_limit_tail_lift', label: 'tail’s greatest lift at the stall' },
   { figure: 'forward_limit_nose_wheel', label: 'nose-wheel lift-off' },
 ] as const;
+
+export type ControlLimitKind = (typeof controlLimitKinds)[number];

@@ -1,6 +1,7 @@
 import type { ChartSpec } from '../../charts/index.ts';
 import {
   carpetPlot,
+  elevatorToTrim,
   loadingDiagram,
   macRuler,
   marginAlongAxis,
@@ -11,9 +12,11 @@ import {
   tailSizing,
 } from '../../charts/index.ts';
 import type { PlanAxis } from '../../plan/plan.ts';
+import { assessesControl } from '../../stages/control.ts';
 import type { RunView } from '../run-view.ts';
 import { alongAxisData } from './along-axis-data.ts';
 import { carpetAxes, carpetData, carpetFigure } from './carpet-data.ts';
+import { elevatorToTrimData } from './elevator-to-trim-data.ts';
 import { loadingDiagramData } from './loading-diagram-data.ts';
 import { buildUpData, macRulerData, picksOf } from './pick-data.ts';
 import { planViewData } from './plan-view-data.ts';
@@ -39,6 +42,8 @@ export async function* chartsOf(view: RunView, carpet?: CarpetChoice): AsyncGene
   yield { name: 'tail-sizing', spec: tailSizing(tailSizingData(view)) };
   yield { name: 'mac-ruler', spec: macRuler(macRulerData(view, picks)) };
   yield { name: 'neutral-point-build-up', spec: neutralPointBuildUp(buildUpData(view, picks)) };
+  const trim = assessesControl(view.study) ? elevatorToTrimData(view, picks[0]) : undefined;
+  if (trim !== undefined) yield { name: 'elevator-to-trim', spec: elevatorToTrim(trim) };
   yield { name: 'plan-views', spec: planView(planViewData(view, picks)) };
 
   const { loading } = view.study;

@@ -1,4 +1,6 @@
 import type { BuildUp, MacRulerData, MacRulerRow, NeutralPointBuildUpData } from '../../charts/index.ts';
+import { conditionFigureName } from '../../figures/condition-figures.ts';
+import { controlLimitKinds } from '../../figures/control-limit-kinds.ts';
 import type { Figure } from '../../figures/figure.ts';
 import { baselineInputs } from '../../stages/build-stages.ts';
 import { runOnce } from '../../stages/run-once.ts';
@@ -65,33 +67,78 @@ function ofMac({ values }: Pick, name: string): number {
 
 export function macRulerData(view: RunView, picks: readonly Pick[]): MacRulerData {
   const { lower, upper } = view.band;
+  const { conditions } = view.study;
+  const several = conditions.length > 1;
   const rows = picks.map((pick): MacRulerRow => {
     const neutralPoint = ofMac(pick, 'neutral_point');
+    const aftmost = several ? ofMac(pick, 'neutral_point_aftmost') : neutralPoint;
+    const controlLimit = controlLimitOf(pick);
+    const from = [
+      ...(upper === undefined ? [] : [aftmost - percent * upper]),
+      ...(controlLimit === undefined ? [] : [controlLimit.at]),
+    ];
     return {
       label: pick.label,
       detail: pick.detail,
       cg: { forward: ofMac(pick, 'cg_forward'), aft: ofMac(pick, 'cg_aft') },
       window: {
-        ...(upper === undefined ? {} : { from: neutralPoint - percent * upper }),
+        ...(from.length === 0 ? {} : { from: Math.max(...from) }),
         ...(lower === undefined ? {} : { to: neutralPoint - percent * lower }),
       },
       neutralPoint,
       aerodynamicCentre: ofMac(pick, 'wing_aerodynamic_centre'),
+      ...(several && {
+        neutralPoints: conditions.map((each) => ofMac(pick, conditionFigureName('neutral_point', each))),
+      }),
+      ...furtherPoints(pick),
+      ...(controlLimit !== undefined && { controlLimit }),
     };
   });
-  return { heading: chartHeading(view, 'CG range, CG window and neutral point on the MAC'), rows };
+  return {
+    heading: chartHeading(view, 'CG range, CG window and neutral point on the MAC'),
+    ...(several && { conditions: conditions.map(({ name }) => name) }),
+    rows,
+  };
+}
+
+/** Points with free stick and of manoeuvre, as far as the study has them. */
+function furtherPoints(pick: Pick): Partial<MacRulerRow> {
+  const figures = {
+    freeStickNeutralPoint: 'neutral_point_free_stick',
+    manoeuvrePoint: 'manoeuvre_point',
+    freeStickManoeuvrePoint: 'manoeuvre_point_free_stick',
+  } as const;
+  return Object.fromEntries(
+    Object.entries(figures)
+      .filter(([, name]) => pick.values.has(name))
+      .map(([key, name]) => [key, ofMac(pick, name)]),
+  );
+}
+
+/** The forward limit of control and what sets it; undefined where it is not worked out. */
+function controlLimitOf(pick: Pick): MacRulerRow['controlLimit'] {
+  if (!pick.values.has('control_limit_forward')) return undefined;
+  const kind = controlLimitKinds[pick.values.get('control_limit_kind') ?? Number.NaN];
+  return { at: ofMac(pick, 'control_limit_forward'), name: kind?.label ?? 'not computed' };
 }
 
 const buildUpSteps = [
   ['wing', 'neutral_point_wing'],
   ['tail', 'neutral_point_tail'],
   ['body', 'neutral_point_body'],
+  ['propeller', 'neutral_point_propeller'],
   ['vertical position', 'neutral_point_height'],
+  ['measured correction', 'neutral_point_correction'],
 ] as const;
 
 export function buildUpData(view: RunView, picks: readonly Pick[]): NeutralPointBuildUpData {
-  const withHeight = view.study.cg.heightGiven;
-  const steps = buildUpSteps.filter(([, figure]) => withHeight || figure !== 'neutral_point_height');
+  const { cg, propeller, corrections } = view.study;
+  const absent = new Set([
+    ...(cg.heightGiven ? [] : ['neutral_point_height']),
+    ...(propeller === undefined ? ['neutral_point_propeller'] : []),
+    ...(corrections === undefined ? ['neutral_point_correction'] : []),
+  ]);
+  const steps = buildUpSteps.filter(([, figure]) => !absent.has(figure));
   const combinations = picks.map(
     (pick): BuildUp => ({
       label: pick.label,

@@ -1,5 +1,7 @@
 import type { CgLimit, TailSizingData } from '../../charts/index.ts';
 import { evaluateSlice } from '../../engine/slice.ts';
+import { conditionFigureName } from '../../figures/condition-figures.ts';
+import { type ControlLimitKind, controlLimitKinds } from '../../figures/control-limit-kinds.ts';
 import { displayUnit } from '../../figures/display.ts';
 import { baselineInputs } from '../../stages/build-stages.ts';
 import { runOnce } from '../../stages/run-once.ts';
@@ -14,6 +16,7 @@ const unvaried = { from: 0.5, to: 1.6 } as const;
 /** A varied range is drawn somewhat beyond its ends. */
 const margin = { below: 0.8, above: 1.15 } as const;
 const sizeDecimals = 3;
+const leastPoint = 'neutral_point';
 
 /** Tail size upward, CG limits across, at the baseline's other numbers. */
 export function tailSizingData(view: RunView): TailSizingData {
@@ -24,13 +27,15 @@ export function tailSizingData(view: RunView): TailSizingData {
   const baseline = study.inputs.get(path);
   if (figure === undefined || baseline === undefined) throw new Error(`the study has no ${path}`);
   const sizes = sizeRange(view, path, baseline);
+  const greatestPoint = study.conditions.length === 1 ? leastPoint : 'neutral_point_aftmost';
+  const kinds = controlLimitsOf(view);
   const slice = evaluateSlice(
     study,
     laidOut.plan.stages,
     [{ name: path, paths: [path], values: [sizes] }],
-    ['neutral_point'],
+    [...new Set([leastPoint, greatestPoint, ...kinds.flatMap(({ figures }) => figures)])],
   );
-  const neutralPoint = slice.get('neutral_point') ?? sizes;
+  const column = (figure: string) => slice.get(figure) ?? sizes;
   const { factor } = displayUnit(figure.dimension, study.show);
   const atBaseline = runOnce(laidOut.plan.stages, baselineInputs(study));
   return {
@@ -38,7 +43,10 @@ export function tailSizingData(view: RunView): TailSizingData {
     sizeTitle: figureTitle(figure, study.show),
     sizes: [...sizes].map((size) => size * factor),
     sizeDecimals,
-    limits: limitsOf(band, neutralPoint),
+    limits: [
+      ...limitsOf(band, column(leastPoint), column(greatestPoint)),
+      ...kinds.map(({ label, figures }) => controlLimit(label, figures.map(column))),
+    ],
     loading: {
       forward: percent * (atBaseline.get('cg_forward') ?? Number.NaN),
       aft: percent * (atBaseline.get('cg_aft') ?? Number.NaN),
@@ -47,21 +55,49 @@ export function tailSizingData(view: RunView): TailSizingData {
   };
 }
 
-function limitsOf(band: RunView['band'], neutralPoint: Float64Array): CgLimit[] {
+/** Forward limits of one kind, in all conditions that have it. */
+interface ControlLimits {
+  readonly label: string;
+  readonly figures: readonly string[];
+}
+
+/** The kinds of forward limit that the study works out. */
+function controlLimitsOf({ study, laidOut }: RunView): ControlLimits[] {
+  const workedOut = new Set(laidOut.plan.stages.flatMap(({ writes }) => writes));
+  const named = ({ figure }: ControlLimitKind) =>
+    study.conditions.length === 1
+      ? [figure]
+      : study.conditions.map((condition) => conditionFigureName(figure, condition));
+  return controlLimitKinds
+    .map((kind) => ({ label: kind.label, figures: named(kind).filter((name) => workedOut.has(name)) }))
+    .filter(({ figures }) => figures.length > 0);
+}
+
+/** The aftmost of forward limits, size by size. */
+function controlLimit(label: string, columns: readonly Float64Array[]): CgLimit {
+  const cg = columns[0].map((_, i) => percent * Math.max(...columns.map((column) => column[i])));
+  return { label, cg, forbidden: 'forward' };
+}
+
+function limitsOf(band: RunView['band'], least: Float64Array, greatest: Float64Array): CgLimit[] {
   const { lower, upper } = band;
   const limits: CgLimit[] = [];
-  const line = (edge: number) => neutralPoint.map((point) => percent * (point - edge));
+  const line = (points: Float64Array, edge: number) => points.map((point) => percent * (point - edge));
   if (lower !== undefined) {
-    limits.push({ label: `aft limit: margin ${bandText({ lower })}`, cg: line(lower), forbidden: 'aft' });
+    limits.push({
+      label: `aft limit: margin ${bandText({ lower })}`,
+      cg: line(least, lower),
+      forbidden: 'aft',
+    });
   }
   if (upper !== undefined) {
     limits.push({
       label: `too stable: margin ${bandText({ upper })}`,
-      cg: line(upper),
+      cg: line(greatest, upper),
       forbidden: 'forward',
     });
   }
-  if (limits.length === 0) limits.push({ label: 'neutral point', cg: line(0), forbidden: 'aft' });
+  if (limits.length === 0) limits.push({ label: 'neutral point', cg: line(least, 0), forbidden: 'aft' });
   return limits;
 }
 
