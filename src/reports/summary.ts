@@ -4,7 +4,8 @@ import { defaultPreferences, preferenceText } from '../selection/shortlist.ts';
 import { figureNameOf } from '../study/inputs.ts';
 import type { Preference } from '../study/study.ts';
 import { axisLabel, figureWords } from './axis-text.ts';
-import { cautions, notAssessed } from './cautions.ts';
+import { cautionsOf, notAssessed, powerWords } from './cautions.ts';
+import { conditionLines } from './condition-text.ts';
 import { firstFlightCg } from './customary-ranges.ts';
 import { countText } from './number-text.ts';
 import type { RunView } from './run-view.ts';
@@ -20,6 +21,11 @@ export interface SummaryFacts {
   /** Rows per formula used outside its fitted range, and per reason why a row is empty. */
   readonly outsideRange: readonly { readonly label: string; readonly rows: number }[];
   readonly notComputed: readonly { readonly label: string; readonly rows: number }[];
+  /** Rows per condition that governs an end of the loading range, and per kind of forward limit. */
+  readonly governs: readonly {
+    readonly words: string;
+    readonly counts: readonly { readonly label: string; readonly rows: number }[];
+  }[];
   /** Notes on customary ranges and on the study's layout. */
   readonly notes: readonly string[];
 }
@@ -32,6 +38,7 @@ export function summaryMarkdown(facts: SummaryFacts): string {
     heading(facts),
     answer(facts),
     limits(facts),
+    governing(facts),
     misses(facts),
     bestByPreference(facts),
     shortlistTable(facts),
@@ -54,8 +61,6 @@ function plain(text: string): string {
 
 function heading({ view }: SummaryFacts): string {
   const { study, date, program } = view;
-  const powerOnly =
-    'Stick fixed, power off only: a single tractor propeller at full power costs 1–8 % MAC (common practice, no source).';
   const body =
     study.body === undefined
       ? ' **No body**: the study says `body: none`, so the body’s destabilising moment is left out.'
@@ -63,7 +68,7 @@ function heading({ view }: SummaryFacts): string {
   return [
     `# ${plain(study.title)}`,
     ...(study.question === undefined ? [] : [`_${plain(study.question)}_`]),
-    `${date}, ${program}. ${powerOnly}${body}`,
+    `${date}, ${program}. ${powerWords(study)}${body}`,
   ].join('\n\n');
 }
 
@@ -97,6 +102,19 @@ function limits({ counts }: SummaryFacts): string {
         `| \`${name}\` | ${countText(fails)} | ${countText(failsAlone)} | ${countText(notComputed)} |`,
     ),
   ].join('\n');
+}
+
+/** How often each condition governs, and what sets the forward limit of control. */
+function governing({ view, governs }: SummaryFacts): string {
+  const lines = governs
+    .filter(({ counts }) => counts.length > 0)
+    .map(({ words, counts }) => {
+      const told = [...counts].sort((p, q) => q.rows - p.rows);
+      return `- ${words}: ${told.map(({ label, rows }) => `${plain(label)} in ${countText(rows)}`).join(', ')}`;
+    });
+  if (lines.length === 0) return '';
+  const more = view.study.conditions.length === 1 ? [] : ['Of the combinations studied:', ''];
+  return ['## What governs', ...more, ...lines].join('\n');
 }
 
 function misses({ view, closestMisses }: SummaryFacts): string {
@@ -161,6 +179,7 @@ const shortlistFigures = [
   'neutral_point',
   'static_margin_forward',
   'static_margin_aft',
+  'control_limit_forward',
 ] as const;
 
 function shortlistTable({ view }: SummaryFacts): string {
@@ -223,6 +242,7 @@ function setup({ view }: SummaryFacts): string {
   );
   return [
     '## What was studied',
+    ...conditionLines(study).map((line) => `- ${line}`),
     ...axes,
     ...held,
     ...skips,
@@ -255,9 +275,9 @@ function cautionsSection({ view }: SummaryFacts): string {
       : '';
   return [
     '## Cautions',
-    ...cautions.map((line) => `- ${line}`),
+    ...cautionsOf(view.study).map((line) => `- ${line}`),
     `- ${accuracy}${downwash}`,
-    `- ${notAssessed}`,
+    `- ${notAssessed(view.study)}`,
   ].join('\n');
 }
 

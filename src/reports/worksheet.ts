@@ -8,7 +8,7 @@ import { baselineInputs } from '../stages/build-stages.ts';
 import { runOnce } from '../stages/run-once.ts';
 import { withNumberGiven } from '../stages/sizing.ts';
 import type { ShowSystem, Study } from '../study/study.ts';
-import { cautions } from './cautions.ts';
+import { cautionsOf } from './cautions.ts';
 
 /** Digits of a worksheet: enough to follow with a pocket calculator. */
 const digits = 6;
@@ -29,6 +29,7 @@ export interface Worksheet {
   readonly given: readonly WorksheetRow[];
   readonly workedOut: readonly WorksheetRow[];
   readonly requirements: readonly string[];
+  readonly cautions: readonly string[];
 }
 
 /** Input figures of one combination of the plan: the fixed numbers and those of its axes. */
@@ -66,6 +67,7 @@ export function makeWorksheet(
     given: rows(given),
     workedOut: rows([...values.keys()].filter((name) => !given.has(name))),
     requirements: requirementLines(laidOut, values, study.show),
+    cautions: cautionsOf(study),
   };
 }
 
@@ -150,7 +152,7 @@ export function worksheetText(sheet: Worksheet): string {
     'Requirements',
     ...sheet.requirements,
     '',
-    ...cautions,
+    ...sheet.cautions,
     '',
   ].join('\n');
 }
@@ -183,7 +185,7 @@ export function worksheetMarkdown(sheet: Worksheet): string {
     '',
     '## Cautions',
     '',
-    ...cautions.map((line) => `- ${line}`),
+    ...sheet.cautions.map((line) => `- ${line}`),
     '',
   ].join('\n');
 }

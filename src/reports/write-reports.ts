@@ -169,8 +169,30 @@ async function gatherFacts(view: RunView, counts: RunCounts): Promise<SummaryFac
     best,
     outsideRange: has('outside_fitted_range') ? await queries.labelCounts('outside_fitted_range') : [],
     notComputed: has('not_computed_because') ? await queries.labelCounts('not_computed_because') : [],
+    governs: await governingCounts(view, has),
     notes: [...notes, ...travelNotes(view, spans)],
   };
+}
+
+/** Figures that name a condition or a kind of limit, and what the summary calls them. */
+const governingFigures = [
+  ['governing_condition_aft', 'the least neutral point'],
+  ['governing_condition_forward', 'the greatest neutral point'],
+  ['control_limit_condition', 'the forward limit of control, by condition'],
+  ['control_limit_kind', 'the forward limit of control, by what sets it'],
+] as const;
+
+/** Rows per label of those figures, where the table has them and there is a choice. */
+async function governingCounts(
+  { queries, study }: RunView,
+  has: (name: string) => boolean,
+): Promise<SummaryFacts['governs']> {
+  const governs: SummaryFacts['governs'][number][] = [];
+  for (const [name, words] of governingFigures) {
+    const chosen = name === 'control_limit_kind' || study.conditions.length > 1;
+    if (chosen && has(name)) governs.push({ words, counts: await queries.labelCounts(name) });
+  }
+  return governs;
 }
 
 /** Figures whose least and greatest value the notes look at, where the table has them. */
