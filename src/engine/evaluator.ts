@@ -1,3 +1,4 @@
+import { neededStages } from '../plan/needed-stages.ts';
 import type { Plan } from '../plan/plan.ts';
 import { blockSize } from '../plan/plan.ts';
 import { StageMemory } from './stage-memory.ts';
@@ -10,7 +11,8 @@ export const skippedFigure = 'skipped';
 
 /**
  * Evaluates ranges of combinations into dense columns, each stage only once for each distinct
- * setting of the axes it depends on, as far as its memory reaches.
+ * setting of the axes it depends on, as far as its memory reaches, and only the stages that lead to
+ * the wanted figures.
  *
  * A stage that depends on every axis is evaluated for the kept rows only; every other stage is
  * evaluated for all settings of its own axes inside the tile and remembered. Nothing is allocated
@@ -30,10 +32,11 @@ export class Evaluator {
     tileRows?: number,
   ) {
     this.tiles = new Tiles(plan, tileRows);
-    this.memories = plan.stages.map(
-      (stage, index) => new StageMemory(stage, plan.axesOfStage[index], this.tiles),
+    const needed = neededStages(plan.stages, [...wanted, skippedFigure]);
+    this.memories = needed.map(
+      (index) => new StageMemory(plan.stages[index], plan.axesOfStage[index], this.tiles),
     );
-    this.skipStageCount = 1 + plan.stages.findIndex((stage) => stage.writes.includes(skippedFigure));
+    this.skipStageCount = 1 + needed.findIndex((index) => plan.stages[index].writes.includes(skippedFigure));
     this.columns = wanted.map(() => new Float64Array(blockSize));
     this.rows = new Int32Array(this.tiles.shape.rows);
     for (const name of wanted) if (name !== combinationFigure) this.tiles.source(name);
