@@ -34,6 +34,7 @@ export type FigureName = keyof typeof entries;
 
 /** Figures that show the inside of the calculation: in worksheets, not in the bulk table. */
 const worksheetOnly: ReadonlySet<FigureName> = new Set<FigureName>([
+  'density_ratio',
   'flap_zero_lift_change',
   'flap_moment',
   'flap_maximum_lift',

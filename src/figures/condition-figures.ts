@@ -7,6 +7,7 @@ import { controlFigures } from './catalogue/control-figures.ts';
  * the aft margin.
  */
 const conditionFigures: ReadonlySet<string> = new Set([
+  'density_ratio',
   'mach',
   'lift_coefficient',
   'wing_lift_slope',

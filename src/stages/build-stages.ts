@@ -2,7 +2,7 @@ import { figureOfInput } from '../figures/study-figures.ts';
 import type { Condition, Study } from '../study/study.ts';
 import type { BaselinePlaces } from './body.ts';
 import { bodyCoupleStage, bodyMomentStages, bodyShapeStages, wakeLengthStage } from './body.ts';
-import { maximumLiftStage, speedStages } from './condition.ts';
+import { airStage, maximumLiftStage, speedStages } from './condition.ts';
 import { stagesOfConditions } from './conditions.ts';
 import { assessesControl } from './control.ts';
 import { controlLimitStages } from './control-limit.ts';
@@ -81,6 +81,7 @@ function conditionStages(study: Study, condition: Condition, places: BaselinePla
     ? [wingLiftStage(study, 'wing_lift_slope_away'), groundLiftStage]
     : [wingLiftStage(study)];
   return [
+    airStage,
     ...flapStages(study, condition),
     maximumLiftStage(study),
     ...speedStages(condition),

@@ -4,10 +4,24 @@ import {
   liftCoefficient,
   machFromCalibratedSpeed,
   machFromDynamicPressure,
+  standardDensity,
 } from '../methods/atmosphere.ts';
 import { shareOfSectionMaximumLift } from '../methods/maximum-lift.ts';
 import type { Condition, Study } from '../study/study.ts';
 import type { Stage } from './stage.ts';
+
+const seaLevelDensity = standardDensity(0);
+
+/** Density of the standard atmosphere over that at sea level: once a condition, not once a combination. */
+export const airStage: Stage = {
+  name: 'air',
+  reads: ['conditions_1_height'],
+  writes: ['density_ratio'],
+  cost: 100,
+  kernel: (count, [height], [ratio]) => {
+    for (let row = 0; row < count; row++) ratio[row] = standardDensity(height[row]) / seaLevelDensity;
+  },
+};
 
 /** Mach number of a condition whose calibrated speed is given. */
 const machStage: Stage = {

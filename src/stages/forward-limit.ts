@@ -6,12 +6,17 @@ import {
   tailDownload,
   tailLiftAt,
 } from '../methods/forward-limit.ts';
+import { forwardLimitByStickForce } from '../methods/free-stick.ts';
 import { shareOfSectionMaximumLift } from '../methods/maximum-lift.ts';
 import { thrustMomentAtPower } from '../methods/propeller.ts';
 import { verticalPositionMoment } from '../methods/trim.ts';
 import type { Condition, Study } from '../study/study.ts';
+import { hasStickForces } from './free-stick.ts';
 import { pressureRatioFigure } from './propeller.ts';
 import type { Stage } from './stage.ts';
+
+/** A condition flown this near its stall speed leaves nothing to slow down by. */
+const slowestRatio = 1 - 1e-6;
 
 /** Figures that the couples at another lift than the condition's are made of. */
 const coupleReads = ['rest_couples', 'neutral_point_height_lift', 'lift_coefficient'] as const;
@@ -181,12 +186,45 @@ export function hasNoseWheelLimit({ landingGear }: Pick<Study, 'landingGear'>, {
   return landingGear?.kind === 'nose_wheel' && groundEffect;
 }
 
-/** Forward limits of the CG in one condition, after its trim. */
+/** Whether the pull to slow down limits the CG: the study says how great it may be. */
+export function hasStickForceLimit(study: Pick<Study, 'control' | 'hinge' | 'inputs'>): boolean {
+  return hasStickForces(study) && study.inputs.has('control.greatest_pull');
+}
+
+/** Forward limit by the pull that slows from the condition's trimmed speed to its stall. */
+const stickForceStage: Stage = {
+  name: 'forward limit by the stick force',
+  reads: [
+    'control_greatest_pull',
+    'stall_speed',
+    'calibrated_speed',
+    'stick_force_by_margin',
+    'trim_slope_limit',
+    'free_stick_step',
+    'spring_step',
+  ],
+  writes: ['forward_limit_stick_force'],
+  cost: 8,
+  kernel: (count, [pull, stall, speed, byMargin, flat, free, spring], [limit]) => {
+    for (let row = 0; row < count; row++) {
+      const ratio = stall[row] / speed[row];
+      const nilForce = flat[row] + free[row] + spring[row];
+      // The steps of spring and bobweight are in the point of nil force, so no force stands beside it.
+      limit[row] =
+        ratio < slowestRatio
+          ? forwardLimitByStickForce(pull[row], ratio, byMargin[row], 1, nilForce, 0)
+          : Number.NaN;
+    }
+  },
+};
+
+/** Forward limits of the CG in one condition, after its trim and stick forces. */
 export function forwardLimitStages(study: Study, condition: Condition): Stage[] {
   return [
     stallStage(study, condition),
     downloadStage(study),
     stallLimitsStage(study),
     ...(hasNoseWheelLimit(study, condition) ? [noseWheelStage(study, condition)] : []),
+    ...(hasStickForceLimit(study) ? [stickForceStage] : []),
   ];
 }

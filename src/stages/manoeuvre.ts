@@ -29,17 +29,18 @@ function pointStage(study: Study): Stage {
       'wing_area',
       'tail_arm',
       'mac',
-      'conditions_1_height',
+      'density_ratio',
       'mass',
       'neutral_point',
       'cg_aft',
     ],
     writes: ['pitch_damping', 'manoeuvre_step', 'manoeuvre_point', 'manoeuvre_margin_aft'],
     cost: 40,
-    kernel: (count, [at, eta, St, S, arm, c, height, mass, hn, aft], [damping, step, point, margin]) => {
+    kernel: (count, [at, eta, St, S, arm, c, sigma, mass, hn, aft], [damping, step, point, margin]) => {
+      const seaLevelDensity = standardDensity(0);
       for (let row = 0; row < count; row++) {
         const cmq = pitchDamping(at[row], eta[row], St[row] / S[row], arm[row] / c[row], factor);
-        const behind = manoeuvreStep(cmq, standardDensity(height[row]), S[row], c[row], mass[row]);
+        const behind = manoeuvreStep(cmq, sigma[row] * seaLevelDensity, S[row], c[row], mass[row]);
         damping[row] = cmq;
         step[row] = behind;
         point[row] = hn[row] + behind;

@@ -33,6 +33,15 @@ export const controlRows: Row[] = [
     'more than one hand can hold',
     zero('no bobweight; common practice, no source'),
   ],
+  [
+    'control.greatest_pull',
+    'P_max',
+    'force',
+    'Greatest pull allowed to slow from the speed of a condition, trimmed there, to its stall.',
+    1,
+    500,
+    'more than two hands can hold',
+  ],
 ];
 
 export const landingGearRows: Row[] = [

@@ -125,6 +125,7 @@ function readAeroplane(
   };
   const body = readBody(map, reading);
   const equipment = readEquipment(map, wingMap, hinge, reading);
+  if (equipment.propeller && !given.cg.heightGiven) assumeThrustHeight(reading);
   const wing = wingBaseline(reading.inputs, given.wing);
   const baseline = { wing, tail: tailBaseline(reading.inputs, given.tail, wing) };
   checkDerivedSizes(given, baseline, reading);
@@ -157,6 +158,15 @@ function readEquipment(
     ...(control && { control }),
     ...(landingGear && { landingGear }),
   };
+}
+
+/** The thrust's moment needs the height of the CG. */
+function assumeThrustHeight({ assumptions }: Reading): void {
+  assumptions.push({
+    path: 'cg.above_datum',
+    value: 'on the datum line',
+    source: 'not given; the moment of the thrust is taken about the datum line',
+  });
 }
 
 /** Stick forces need the elevator's size, which follows from the tail where it is not given. */

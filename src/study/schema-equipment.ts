@@ -55,6 +55,7 @@ export const control = z
     gearing: input('control.gearing'),
     spring: optionalInput('control.spring'),
     bobweight: optionalInput('control.bobweight'),
+    greatest_pull: optionalInput('control.greatest_pull'),
   })
   .meta({ description: 'The pitch control; without it there are no stick forces.' });
 

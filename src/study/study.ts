@@ -103,7 +103,7 @@ export interface PropellerChoices {
  */
 export type HingeKind = 'given' | 'theory' | 'none';
 
-/** Inputs `control.gearing`, `.spring`, `.bobweight`, all present. */
+/** Inputs `control.gearing`, `.spring`, `.bobweight`, all present; `.greatest_pull` where given. */
 export interface ControlChoices {
   readonly kind: 'stick' | 'wheel';
 }

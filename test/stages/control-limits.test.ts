@@ -210,6 +210,42 @@ describe('the forward limit of control', () => {
     );
   });
 
+  it('may be the pull to the stall, where the study says how great it may be', () => {
+    const pulled = (newtons: number) =>
+      reader({
+        ...whole,
+        equipment: equipment.replace('1.9 rad/m', `1.9 rad/m, greatest_pull: ${newtons} N`),
+      });
+    const [light, strong] = [pulled(2), pulled(20)];
+    expect(kindOf(light)).toBe('forward_limit_stick_force');
+    expect(light('control_limit_forward')).toBe(
+      Math.max(...names.map((name) => light(`forward_limit_stick_force_${name}`))),
+    );
+    expect(strong('forward_limit_stick_force_cruise')).toBeLessThan(
+      light('forward_limit_stick_force_cruise'),
+    );
+    // Ten times the pull is ten times as far ahead of the point of nil force.
+    const nil = (value: Reader) =>
+      value('trim_slope_limit_cruise') + value('free_stick_step_cruise') + value('spring_step_cruise');
+    const ahead = (value: Reader) => nil(value) - value('forward_limit_stick_force_cruise');
+    expect(ahead(strong) / ahead(light)).toBeCloseTo(10, 9);
+    const speedRatio = light('stall_speed_cruise') / light('calibrated_speed_cruise');
+    const force =
+      light('stick_force_by_margin_cruise') *
+      (light('forward_limit_stick_force_cruise') - nil(light)) *
+      (1 - speedRatio ** 2);
+    expect(force).toBeCloseTo(2, 10);
+  });
+
+  it('does not bind by the pull in a condition at the stall itself', () => {
+    const value = reader({
+      conditions: '[{name: slow, times_stall: 1, height: 0 m}]',
+      equipment: control(', greatest_pull: 5 N'),
+    });
+    expect(value('forward_limit_stick_force')).toBeNaN();
+    expect(value('control_limit_forward')).toBe(value('forward_limit_elevator'));
+  });
+
   it('leaves the margin of control, and closes the CG window', () => {
     const value = reader(whole);
     expect(value('control_margin_forward')).toBeCloseTo(0.24 - value('control_limit_forward'), 12);

@@ -368,11 +368,18 @@ export const controlFigures = {
     'h_R = [C_L,g h_r + C_Lt h_t − C_m,g + (C_W − C_L,g − C_Lt)((x_m − x_c)/c + 0.03 (z_m + z_cg)/c)]/C_W, C_L,g the lift in the ground attitude',
     'exact for linear parts, ours; rolling friction common practice, no source',
   ),
+  forward_limit_stick_force: entry(
+    'h_P',
+    'fraction_of_mac',
+    'CG at which slowing from the condition’s speed, trimmed there, to its stall takes the greatest pull; empty where that speed is no higher than the stall.',
+    'h_P = h_slope + Δh_f + Δh_s + P_max/[(1 − (V_S/V_c)²) K W/S]',
+    'exact for linear parts and couples that do not change with lift',
+  ),
   control_limit_forward: entry(
     'h_c',
     'fraction_of_mac',
     'Forward limit of control: the aftmost of all limits in all conditions.',
-    'h_c = max of h_δ, h_t,max, h_R over the conditions',
+    'h_c = max of h_δ, h_t,max, h_R, h_P over the conditions',
     definition,
   ),
   control_limit_condition: entry(

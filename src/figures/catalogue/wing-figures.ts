@@ -80,6 +80,13 @@ export const wingFigures = {
     'tan Λ_½ = tan Λ_e − (1/A)(1−λ_e)/(1+λ_e)',
     exact,
   ),
+  density_ratio: entry(
+    'σ_ρ',
+    'ratio',
+    'Density of the standard atmosphere at the condition’s height over that at sea level.',
+    'σ_ρ = ρ/ρ0',
+    'ISO 2533',
+  ),
   flap_zero_lift_change: entry(
     'Δα_f',
     'angle',
