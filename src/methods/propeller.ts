@@ -224,7 +224,9 @@ export function thrustMomentSlopeAtPower(thrustMoment: number, liftCoefficient: 
  * Exact for a constant propeller efficiency.
  */
 export function thrustMomentAtPower(thrustMoment: number, liftCoefficient: number, other: number): number {
-  return thrustMoment * (other / liftCoefficient) ** thrustExponent.constantPower;
+  // The power 3/2, quicker than the general one.
+  const ratio = other / liftCoefficient;
+  return thrustMoment * ratio * Math.sqrt(ratio);
 }
 
 /** Slope dC_m,T/dC_L at constant thrust, C_m,T/C_L [-]; both [-], C_L not 0. Exact. */
