@@ -13,16 +13,21 @@ interface Dependants {
   readonly follows: readonly string[];
 }
 
-/** One entry for each varied number that is one of several that settle a shape. */
+/**
+ * One entry for each varied number that is one of several that settle a shape.
+ * @param sized path of the number that the study's sizing chooses
+ */
 export function describeHeld(
   axes: readonly Axis[],
   choices: Choices,
   inputs: ReadonlyMap<string, number>,
   show: ShowSystem,
+  sized?: string,
 ): Held[] {
   const varied = new Set(axes.flatMap((axis) => axis.paths));
   const words = (path: string) => {
     if (varied.has(path)) return `${path} (varied as well)`;
+    if (path === sized) return `${path} (chosen in each combination)`;
     const value = inputs.get(path);
     if (value === undefined) return path;
     return `${path} (${showValue(value, inputDefinition(path).dimension, show)})`;

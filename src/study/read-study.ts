@@ -68,6 +68,7 @@ function readTree(
   const question = wordIn(root, 'question');
   const aircraftClass = wordIn(root, 'class') as AircraftClass | undefined;
   const corrections = readCorrections(root, reading);
+  const range = readSizeRange(root, axes, choices, reading);
   const outline: Study = {
     file,
     text,
@@ -88,9 +89,9 @@ function readTree(
     preferences: [],
     keep: readKeep(root, reading),
     assumptions: reading.assumptions,
-    held: describeHeld(axes, choices, reading.inputs, show),
+    held: describeHeld(axes, choices, reading.inputs, show, range?.path),
   };
-  return withFigures(outline, readSizeRange(root, axes, choices, reading), root, knownFigures, reading);
+  return withFigures(outline, range, root, knownFigures, reading);
 }
 
 interface Aeroplane {

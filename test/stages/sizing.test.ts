@@ -239,3 +239,9 @@ cases: {solo: [pilot]}`.replaceAll(/^/gm, '    ');
     expect(Number(workedOut)).toBeCloseTo(figure(figuresOf(study), 'tail_area'), 5);
   });
 });
+
+it('a number chosen in each combination is not told as held', () => {
+  const { held } = sized(onMargin);
+  const span = held.find((one) => one.varied === 'wing.span');
+  expect(span?.held).toContain('tail.area (chosen in each combination)');
+});

@@ -3,8 +3,8 @@ import { displayUnit } from '../../figures/display.ts';
 import { bodyStationPlace } from '../../methods/body-stations.ts';
 import { panelLeadingEdgeTangent } from '../../methods/panel-planform.ts';
 import { spanwiseStationOfMac, sweepTangentAt } from '../../methods/planform.ts';
-import { baselineInputs } from '../../stages/build-stages.ts';
-import { runOnce } from '../../stages/run-once.ts';
+import type { BaselinePlaces } from '../../stages/body.ts';
+import { baselinePlaces } from '../../stages/build-stages.ts';
 import type { Study } from '../../study/study.ts';
 import type { RunView } from '../run-view.ts';
 import { chartHeading } from '../run-view.ts';
@@ -16,9 +16,9 @@ const quarterChord = 0.25;
 
 /** Plan-view outlines of the picks, in the study's unit of length. */
 export function planViewData(view: RunView, picks: readonly Pick[]): PlanViewData {
-  const { study, laidOut } = view;
+  const { study } = view;
   const { unit, factor } = displayUnit('length', study.show);
-  const baseline = runOnce(laidOut.plan.stages, baselineInputs(study));
+  const baseline = baselinePlaces(study);
   const scaled = (points: readonly PlanPoint[]) =>
     points.map(({ station, aside }) => ({ station: station * factor, aside: aside * factor }));
   const outlines = picks.map((pick): PlanOutline => {
@@ -107,21 +107,19 @@ function tailOutline({ tail }: Study, values: Values): PlanPoint[] {
 }
 
 /** Right half of the body, moved with wing and tail as the moment's integrals take it. */
-function bodyOutline({ body }: Study, values: Values, baseline: Values): PlanPoint[] | undefined {
+function bodyOutline({ body }: Study, values: Values, baseline: BaselinePlaces): PlanPoint[] | undefined {
   if (body === undefined) return undefined;
   const value = (name: string) => values.get(name) ?? Number.NaN;
-  const before = (name: string) => baseline.get(name) ?? Number.NaN;
-  const tailOf = (read: (name: string) => number) =>
-    read('quarter_mac_station') + read('tail_arm') - read('wing_root_leading_edge');
-  const last = value(`body_stations_${body.stations}_at`) - before('wing_root_leading_edge');
+  const tail = value('quarter_mac_station') + value('tail_arm');
+  const behind = (station: number) => value(`body_stations_${station}_at`) - baseline.rootLeadingEdge;
   const points = Array.from({ length: body.stations }, (_, i) => {
     const place = bodyStationPlace(
-      value(`body_stations_${i + 1}_at`) - before('wing_root_leading_edge'),
-      before('wing_root_chord'),
-      tailOf(before),
-      last,
+      behind(i + 1),
+      baseline.rootChord,
+      baseline.tail - baseline.rootLeadingEdge,
+      behind(body.stations),
       value('wing_root_chord'),
-      tailOf(value),
+      tail - value('wing_root_leading_edge'),
       body.boom,
     );
     return {
@@ -132,6 +130,5 @@ function bodyOutline({ body }: Study, values: Values, baseline: Values): PlanPoi
   if (!body.boom) return points;
   const boom = value('body_boom_width') / 2;
   const end = points[points.length - 1];
-  const tail = value('wing_root_leading_edge') + tailOf(value);
   return end.station < tail ? [...points, { ...end, aside: boom }, { station: tail, aside: boom }] : points;
 }

@@ -38,6 +38,8 @@ export function tailSizingData(view: RunView): TailSizingData {
   const column = (figure: string) => slice.get(figure) ?? sizes;
   const { factor } = displayUnit(figure.dimension, study.show);
   const atBaseline = runOnce(laidOut.plan.stages, baselineInputs(study));
+  const chosen = atBaseline.get(name) ?? baseline;
+  const sizeAtBaseline = Number.isNaN(chosen) ? baseline : chosen;
   return {
     heading: chartHeading(view, 'Tail sizing at the baseline'),
     sizeTitle: figureTitle(figure, study.show),
@@ -51,7 +53,7 @@ export function tailSizingData(view: RunView): TailSizingData {
       forward: percent * (atBaseline.get('cg_forward') ?? Number.NaN),
       aft: percent * (atBaseline.get('cg_aft') ?? Number.NaN),
     },
-    baseline: baseline * factor,
+    baseline: sizeAtBaseline * factor,
   };
 }
 
