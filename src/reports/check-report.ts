@@ -8,6 +8,7 @@ import { figureNameOf } from '../study/inputs.ts';
 import type { Study } from '../study/study.ts';
 import { axisLabel } from './axis-text.ts';
 import { byteText, countText, durationText } from './number-text.ts';
+import { presetTexts } from './preset-text.ts';
 import { bandText } from './run-view.ts';
 
 export interface CheckFacts {
@@ -68,6 +69,7 @@ export function checkReport({
     ...section('Required', [
       `static-margin band: ${bandText(study.band)}`,
       ...laidOut.edges.map((edge) => requirementText(edge, study, laidOut)),
+      ...presetTexts(study).map(({ name, text }) => `${name}: ${text}`),
     ]),
     ...section('The baseline', baselineLines(study, laidOut)),
     ...section('Stages, and how often each is evaluated', stageLines(laidOut)),

@@ -8,6 +8,7 @@ import { cautionsOf, notAssessed, powerWords } from './cautions.ts';
 import { conditionLines } from './condition-text.ts';
 import { firstFlightCg } from './customary-ranges.ts';
 import { countText } from './number-text.ts';
+import { presetTexts } from './preset-text.ts';
 import type { RunView } from './run-view.ts';
 import { bandText, rowValue, valueShower } from './run-view.ts';
 
@@ -92,7 +93,8 @@ function answer({ view, counts }: SummaryFacts): string {
   ].join('\n\n');
 }
 
-function limits({ counts }: SummaryFacts): string {
+function limits({ view, counts }: SummaryFacts): string {
+  const presets = presetTexts(view.study).map(({ name, text }) => `- \`${name}\`: ${text}`);
   return [
     '## What limits the others',
     '| requirement | fails | fails alone | not computed |',
@@ -101,6 +103,7 @@ function limits({ counts }: SummaryFacts): string {
       ({ name, fails, failsAlone, notComputed }) =>
         `| \`${name}\` | ${countText(fails)} | ${countText(failsAlone)} | ${countText(notComputed)} |`,
     ),
+    ...(presets.length === 0 ? [] : ['', ...presets]),
   ].join('\n');
 }
 

@@ -5,6 +5,7 @@ import { bodyCoupleStage, bodyMomentStages, bodyShapeStages, wakeLengthStage } f
 import { airStage, maximumLiftStage, speedStages } from './condition.ts';
 import { stagesOfConditions } from './conditions.ts';
 import { assessesControl } from './control.ts';
+import { forceMarginStages, stallForceStages } from './control-forces.ts';
 import { controlLimitStages } from './control-limit.ts';
 import { angleOfAttackStage, downwashStage, machRatioStage } from './downwash.ts';
 import { flapDownwashStages, flapStages } from './flaps.ts';
@@ -65,7 +66,7 @@ export function buildStages(study: Study, control = assessesControl(study)): Sta
     ...(control ? controlShapeStages(study, places) : []),
     ...ofConditions.stages,
     ...governingStages(study, ofConditions.common),
-    ...(control ? controlLimitStages(study) : []),
+    ...(control ? [...forceMarginStages(study), ...controlLimitStages(study)] : []),
     windowStage(study, control),
     reasonStage(study),
     requirementsStage(requirementEdges(study)),
@@ -117,6 +118,7 @@ function controlStages(study: Study, condition: Condition): Stage[] {
     ...trimStages(study, condition),
     ...freeStickStages(study),
     ...manoeuvreStages(study),
+    ...stallForceStages(study, condition),
     ...forwardLimitStages(study, condition),
   ];
 }

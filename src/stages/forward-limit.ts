@@ -196,23 +196,20 @@ const stickForceStage: Stage = {
   name: 'forward limit by the stick force',
   reads: [
     'control_greatest_pull',
-    'stall_speed',
-    'calibrated_speed',
+    'lift_coefficient',
+    'maximum_lift',
     'stick_force_by_margin',
-    'trim_slope_limit',
-    'free_stick_step',
-    'spring_step',
+    'nil_force_at_stall',
   ],
   writes: ['forward_limit_stick_force'],
   cost: 8,
-  kernel: (count, [pull, stall, speed, byMargin, flat, free, spring], [limit]) => {
+  kernel: (count, [pull, cl, maximum, byMargin, nil], [limit]) => {
     for (let row = 0; row < count; row++) {
-      const ratio = stall[row] / speed[row];
-      const nilForce = flat[row] + free[row] + spring[row];
+      const ratio = Math.sqrt(cl[row] / maximum[row]);
       // The steps of spring and bobweight are in the point of nil force, so no force stands beside it.
       limit[row] =
         ratio < slowestRatio
-          ? forwardLimitByStickForce(pull[row], ratio, byMargin[row], 1, nilForce, 0)
+          ? forwardLimitByStickForce(pull[row], ratio, byMargin[row], 1, nil[row], 0)
           : Number.NaN;
     }
   },

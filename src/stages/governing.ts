@@ -23,6 +23,7 @@ const worst: Readonly<Record<string, 1 | -1>> = {
   manoeuvre_margin_free_stick_aft: -1,
   stick_force_per_g_forward: 1,
   stick_force_per_g_aft: -1,
+  stick_force_at_stall_forward: 1,
 };
 
 /**

@@ -42,6 +42,16 @@ export const controlRows: Row[] = [
     500,
     'more than two hands can hold',
   ],
+  [
+    'control.load_factor',
+    'n_lim',
+    'ratio',
+    'Positive limit load factor, at which the regulation asks for a least stick force.',
+    1.5,
+    12,
+    'from a large transport’s to an unlimited aerobatic aeroplane’s',
+    { value: 3.8, source: 'normal category; common practice, no source' },
+  ],
 ];
 
 export const landingGearRows: Row[] = [

@@ -6,7 +6,7 @@ import type { ControlChoices, LandingGearChoices } from './study.ts';
 export function readControl(aeroplane: SourceNode, reading: Reading): ControlChoices | undefined {
   const control = mapIn(aeroplane, 'control');
   if (!control) return undefined;
-  for (const key of ['gearing', 'spring', 'bobweight', 'greatest_pull'])
+  for (const key of ['gearing', 'spring', 'bobweight', 'greatest_pull', 'load_factor'])
     reading.take(control, key, `control.${key}`);
   return { kind: wordIn(control, 'kind') === 'wheel' ? 'wheel' : 'stick' };
 }

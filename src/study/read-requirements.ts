@@ -4,9 +4,10 @@ import type { Dimension } from '../figures/figure.ts';
 import type { FigureNames, KnownFigure } from './known-figures.ts';
 import type { QuantityKind } from './quantities.ts';
 import { allConditions, checkConditionName } from './read-conditions.ts';
+import { presetRequirement } from './read-presets.ts';
 import type { Reading } from './reading.ts';
 import { keySpan, type MapEntry, mapIn, type SourceNode, type Span, valueIn, wordIn } from './source.ts';
-import type { Band, Condition, Preference, Requirement } from './study.ts';
+import type { Band, Condition, Preference, Requirement, Study } from './study.ts';
 
 const bandKey = 'static_margin';
 const inRangeKey = 'in_range';
@@ -37,7 +38,7 @@ function anyOf(dimension: Dimension): QuantityKind {
 /** Reads `require`, in the order of the file. */
 export function readRequirements(
   root: SourceNode,
-  conditions: readonly Condition[],
+  study: Pick<Study, 'conditions' | 'control' | 'hinge'>,
   figures: FigureNames,
   reading: Reading,
 ): Requirements {
@@ -45,12 +46,17 @@ export function readRequirements(
   const requirements: Requirement[] = [];
   for (const [key, entry] of mapIn(root, 'require')?.entries ?? []) {
     if (key === bandKey) {
-      const read = readBand(entry.value, conditions, reading);
+      const read = readBand(entry.value, study.conditions, reading);
       band = read.band;
       requirements.push(...read.requirements);
     } else if (key === inRangeKey) {
       const wanted = entry.value.kind === 'scalar' && entry.value.value === true;
       if (wanted) requirements.push({ name: inRangeKey, figure: inRangeKey, scale: 1 });
+    } else if (valueIn(entry.value, 'preset')) {
+      const scale = (otherwise: number) =>
+        readScale(entry.value, 'force', otherwise, `require.${key}`, reading);
+      const requirement = presetRequirement(key, entry, study, scale, reading);
+      if (requirement) requirements.push(requirement);
     } else {
       const requirement = readRequirement(key, entry, figures, reading);
       if (requirement) requirements.push(requirement);

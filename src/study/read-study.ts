@@ -17,6 +17,7 @@ import { readControl, readLandingGear } from './read-control.ts';
 import { readFlaps } from './read-flaps.ts';
 import { checkCaseMasses, readLoading } from './read-loading.ts';
 import { readMethods } from './read-methods.ts';
+import { assumeGreatestPull } from './read-presets.ts';
 import { readPropeller } from './read-propeller.ts';
 import { readColumns, readKeep, readPreferences, readRequirements } from './read-requirements.ts';
 import { readCorrections, readSizeRange, readSizing, type SizeRange } from './read-size.ts';
@@ -64,6 +65,7 @@ function readTree(
   const aeroplane = readAeroplane(root, named, reading);
   if (!aeroplane) return undefined;
   const { choices, equipment, body, axes } = aeroplane;
+  assumeGreatestPull(root, equipment, reading);
   const show = wordIn(root, 'show') === 'US' ? 'US' : 'metric';
   const question = wordIn(root, 'question');
   const aircraftClass = wordIn(root, 'class') as AircraftClass | undefined;
@@ -214,7 +216,7 @@ function withFigures(
   const figures = new FigureNames(figuresOf(outline, knownFigures, reading), outline);
   checkNamesOfFigures(outline, root, knownFigures, reading);
   const size = readSizing(range, root, figures, reading);
-  const { band, requirements } = readRequirements(root, outline.conditions, figures, reading);
+  const { band, requirements } = readRequirements(root, outline, figures, reading);
   const preferences = readPreferences(root, figures, reading);
   const columns = readColumns(root, figures, reading);
   return {

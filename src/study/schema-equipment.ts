@@ -56,6 +56,7 @@ export const control = z
     spring: optionalInput('control.spring'),
     bobweight: optionalInput('control.bobweight'),
     greatest_pull: optionalInput('control.greatest_pull'),
+    load_factor: optionalInput('control.load_factor'),
   })
   .meta({ description: 'The pitch control; without it there are no stick forces.' });
 

@@ -3,6 +3,7 @@
  * editors both come from here. What numbers mean, their units and limits stand in inputs.ts.
  */
 import { z } from 'zod';
+import { forcePresetNames } from './force-presets.ts';
 import { inputDefinition, inputDefinitions } from './inputs.ts';
 import { control, flaps, hinge, landingGear, loading, propeller } from './schema-equipment.ts';
 import { anyNumber, input, optionalInput, words } from './schema-input.ts';
@@ -276,6 +277,13 @@ const margin = z
   })
   .meta({ description: 'The static-margin band, kept over the whole CG range.' });
 const requirement = z.strictObject({
+  preset: z
+    .enum(forcePresetNames)
+    .meta({
+      description:
+        'A limit of control force from a regulation text, to be confirmed against your own rules; in place of figure, at_least and at_most.',
+    })
+    .optional(),
   figure: words('Name of the figure; the requirement’s own name when left out.').optional(),
   at_least: anyNumber.meta({ description: 'Least value allowed.' }).optional(),
   at_most: anyNumber.meta({ description: 'Greatest value allowed.' }).optional(),

@@ -4,6 +4,8 @@
  * (`wing.span`, `wing.panels[1].taper`, `body.stations[3].width`; list entries count from 1).
  */
 
+import type { ForcePresetName } from './force-presets.ts';
+
 export type ShowSystem = 'metric' | 'US';
 export type AircraftClass = 'light_aeroplane' | 'homebuilt' | 'sailplane' | 'twin' | 'uncrewed';
 export type SweepKind = 'quarter_chord' | 'leading_edge';
@@ -103,7 +105,10 @@ export interface PropellerChoices {
  */
 export type HingeKind = 'given' | 'theory' | 'none';
 
-/** Inputs `control.gearing`, `.spring`, `.bobweight`, all present; `.greatest_pull` where given. */
+/**
+ * Inputs `control.gearing`, `.spring`, `.bobweight`, `.load_factor`, all present; `.greatest_pull` where
+ * given, or where a preset requirement limits it.
+ */
 export interface ControlChoices {
   readonly kind: 'stick' | 'wheel';
 }
@@ -192,6 +197,8 @@ export interface Requirement {
   readonly atMost?: number;
   /** Shortfalls are divided by this, in the figure's SI unit. > 0 */
   readonly scale: number;
+  /** The preset that figure and edge come from. */
+  readonly preset?: ForcePresetName;
 }
 
 export interface Preference {

@@ -225,15 +225,14 @@ describe('the forward limit of control', () => {
       light('forward_limit_stick_force_cruise'),
     );
     // Ten times the pull is ten times as far ahead of the point of nil force.
-    const nil = (value: Reader) =>
-      value('trim_slope_limit_cruise') + value('free_stick_step_cruise') + value('spring_step_cruise');
+    const nil = (value: Reader) => value('nil_force_at_stall_cruise');
     const ahead = (value: Reader) => nil(value) - value('forward_limit_stick_force_cruise');
     expect(ahead(strong) / ahead(light)).toBeCloseTo(10, 9);
-    const speedRatio = light('stall_speed_cruise') / light('calibrated_speed_cruise');
+    // Dynamic pressures go as one over the lift coefficients.
     const force =
       light('stick_force_by_margin_cruise') *
       (light('forward_limit_stick_force_cruise') - nil(light)) *
-      (1 - speedRatio ** 2);
+      (1 - light('lift_coefficient_cruise') / light('maximum_lift_cruise'));
     expect(force).toBeCloseTo(2, 10);
   });
 
