@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { figuresOfStudy } from '../../src/figures/study-figures.ts';
 import { replaced, testStudy } from '../studies.ts';
 
-const none = { requirements: [], ranges: [], reasons: [] };
+const none = { requirements: [], ranges: [], reasons: [], conditions: [] };
 const figuresOf = (changes: Parameters<typeof testStudy>[0]) => figuresOfStudy(testStudy(changes), none);
 
 /** Figures of the tail as the study gives them, and the formulas that use their symbols. */
