@@ -124,6 +124,19 @@ function stallLimitsStage(study: Study): Stage {
   };
 }
 
+/** The weight as a lift coefficient at the speed of rotation. */
+const rotationStage: Stage = {
+  name: 'weight at rotation',
+  reads: ['mass', 'landing_gear_rotation_speed', 'conditions_1_height', 'wing_area'],
+  writes: ['rotation_weight'],
+  cost: 100,
+  kernel: (count, [mass, speed, height, S], [weight]) => {
+    for (let row = 0; row < count; row++) {
+      weight[row] = liftCoefficient(mass[row], speed[row], height[row], S[row]);
+    }
+  },
+};
+
 /** Forward limit by lifting the nose wheel at the speed of rotation, wheels on the ground. */
 function noseWheelStage(study: Study, { power }: Condition): Stage {
   const running = power === 'fraction';
@@ -134,10 +147,7 @@ function noseWheelStage(study: Study, { power }: Condition): Stage {
     reads: [
       ...coupleReads,
       ...fullUpReads,
-      'mass',
-      'wing_area',
-      'landing_gear_rotation_speed',
-      'conditions_1_height',
+      'rotation_weight',
       'landing_gear_ground_angle',
       'zero_lift_body_angle',
       'rest_position',
@@ -151,14 +161,14 @@ function noseWheelStage(study: Study, { power }: Condition): Stage {
       ...(heightGiven ? ['cg_above_datum'] : []),
     ],
     writes: ['forward_limit_nose_wheel'],
-    cost: 90,
+    cost: 30,
     kernel: (count, inputs, [limit]) => {
-      const [rest, byHeight, cl, whole, share, atZero, elevator, up, mass, S, speed, altitude] = inputs;
-      const [groundAngle, alpha, hr, ht, download, wheels, below, leadingEdge, mac] = inputs.slice(12);
-      const [thrust, ofPropeller] = powered ? inputs.slice(21) : [];
+      const [rest, byHeight, cl, whole, share, atZero, elevator, up, weightOnWing] = inputs;
+      const [groundAngle, alpha, hr, ht, download, wheels, below, leadingEdge, mac] = inputs.slice(9);
+      const [thrust, ofPropeller] = powered ? inputs.slice(18) : [];
       const cgHeight = heightGiven ? inputs[inputs.length - 1] : undefined;
       for (let row = 0; row < count; row++) {
-        const weight = liftCoefficient(mass[row], speed[row], altitude[row], S[row]);
+        const weight = weightOnWing[row];
         const slope = whole[row] - share[row];
         const byAngle = slope * (groundAngle[row] - alpha[row]);
         const lift = byAngle + (powered ? ofPropeller[row] : 0);
@@ -221,7 +231,7 @@ export function forwardLimitStages(study: Study, condition: Condition): Stage[] 
     stallStage(study, condition),
     downloadStage(study),
     stallLimitsStage(study),
-    ...(hasNoseWheelLimit(study, condition) ? [noseWheelStage(study, condition)] : []),
+    ...(hasNoseWheelLimit(study, condition) ? [rotationStage, noseWheelStage(study, condition)] : []),
     ...(hasStickForceLimit(study) ? [stickForceStage] : []),
   ];
 }

@@ -396,6 +396,13 @@ export const controlFigures = {
     'h_t,max = (C_L,max h_r + C_Lt,min h_t − C_m,s)/(C_L,max + C_Lt,min)',
     linear,
   ),
+  rotation_weight: entry(
+    'C_W',
+    'ratio',
+    'Weight as a lift coefficient at the speed of rotation.',
+    'C_W = m g/(½ ρ0 V_e² S), V_e from V_R and height',
+    exact,
+  ),
   forward_limit_nose_wheel: entry(
     'h_R',
     'fraction_of_mac',
