@@ -149,6 +149,22 @@ function balance(
   return { lift: liftAt(x), moment };
 }
 
+describe('sizing by trim', () => {
+  it('finds the tail incidence at which the elevator is straight in cruise', () => {
+    const value = reader({
+      wing: 'incidence: 2 deg',
+      rest: 'size: {choose: tail.incidence, so_that: elevator_to_trim_aft, is: 0 deg, between: [-8 deg, 6 deg]}',
+      tail: 'incidence: 0 deg',
+    });
+    expect(value('elevator_to_trim_aft')).toBeCloseTo(0, 8);
+    const level = reader({ wing: 'incidence: 2 deg', equipment: control() });
+    // A degree of incidence is τ degrees of elevator less.
+    const wanted = level('elevator_effectiveness') * level('elevator_to_trim_aft');
+    expect(value('tail_incidence')).toBeCloseTo(wanted, 8);
+    expect(value('tail_incidence')).not.toBeCloseTo(0, 3);
+  });
+});
+
 describe('trim slope limit and neutral point', () => {
   const at = (height: number) =>
     reader({
