@@ -94,7 +94,7 @@ function answer({ view, counts }: SummaryFacts): string {
 }
 
 function limits({ view, counts }: SummaryFacts): string {
-  const presets = presetTexts(view.study).map(({ name, text }) => `- \`${name}\`: ${text}`);
+  const presets = presetTexts(view.study).map(({ name, text }) => `- ${plain(name)}: ${text}`);
   return [
     '## What limits the others',
     '| requirement | fails | fails alone | not computed |',

@@ -113,6 +113,19 @@ describe('the summary', () => {
     expect(fixed).not.toMatch(/rides with the wing: over/);
   });
 
+  it('tells of a preset its paragraph, its edition, and that it is to be confirmed', async () => {
+    const summary = await summaryOf({
+      vary: 'tail.volume: [0.48, 0.5]',
+      cg: '{as: percent_mac, forward: 24 %, aft: 33 %}\n  control: {kind: wheel, gearing: 1.9 rad/m}',
+      require: 'limit_force: {preset: 14-cfr-23.155-2016}\n"<b>": {preset: 14-cfr-23.143-c-2016}',
+    });
+    const confirm = 'as in force until 2017, to be confirmed against your own rules';
+    expect(summary).toContain(`- limit\\_force: 14 CFR 23.155(a), ${confirm}: least stick force`);
+    expect(summary).toContain(`- &lt;b&gt;: 14 CFR 23.143(c), ${confirm}: greatest pitch force`);
+    expect(summary).toContain(`- \`control.greatest_pull\` 333.6 N: 14 CFR 23.143(c), ${confirm}`);
+    expect(summary).toContain('| `limit_force.at_least` |');
+  });
+
   it('keeps a hostile title and question as plain text', async () => {
     const summary = await summaryOf({
       head: 'title: "# <script>alert(1)</script> | *x*"\nquestion: "`a` [b](c)"',
