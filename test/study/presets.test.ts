@@ -83,7 +83,7 @@ const cases: readonly FaultCase[] = [
   },
   {
     what: 'a load factor without a turn',
-    text: wholeEdited(['bobweight: 3 N', 'bobweight: 3 N, load_factor: 1']),
+    text: wholeEdited(['load_factor: 4.4', 'load_factor: 1']),
     code: 'OUT_OF_RANGE',
     mark: '1',
     line: 'load_factor',

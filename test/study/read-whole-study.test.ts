@@ -43,6 +43,7 @@ describe('numbers', () => {
     ['control.gearing', 1.9],
     ['control.spring', 4],
     ['control.bobweight', 3],
+    ['control.load_factor', 4.4],
     ['landing_gear.main_wheels', 2.75],
     ['landing_gear.rotation_speed', (48 * 1852) / 3600],
     ['landing_gear.ground_angle', 2 * deg],
@@ -233,7 +234,7 @@ test('what equipment leaves out is assumed', () => {
   const study = read(
     wholeEdited(
       [', efficiency: 78 %, tail_in_slipstream: 60 %', ''],
-      [', spring: 4 N, bobweight: 3 N', ''],
+      [', spring: 4 N, bobweight: 3 N, load_factor: 4.4', ''],
       [', ground_angle: 2 deg, below_datum: 0.9 m', ''],
       ['area: 0.61 m^2, chord: 0.26 m, ', ''],
     ),
@@ -243,6 +244,7 @@ test('what equipment leaves out is assumed', () => {
     'propeller.tail_in_slipstream',
     'control.spring',
     'control.bobweight',
+    'control.load_factor',
     'landing_gear.ground_angle',
     'landing_gear.below_datum',
     'tail.elevator.area',

@@ -22,7 +22,7 @@ aeroplane:
       - {at: 2 m, width: 1.1 m, depth: 1.2 m}
       - {at: 7 m, width: 0.2 m, depth: 0.3 m}
   propeller: {place: tractor, diameter: 1.7 m, blades: 2, blade_chord: 0.13 m, blade_angle: 20 deg, station: 0.1 m, above_datum: 0.05 m, power: 98 hp, efficiency: 78 %, tail_in_slipstream: 60 %}
-  control: {kind: stick, gearing: 1.9 rad/m, spring: 4 N, bobweight: 3 N}
+  control: {kind: stick, gearing: 1.9 rad/m, spring: 4 N, bobweight: 3 N, load_factor: 4.4}
   landing_gear: {kind: nose_wheel, main_wheels: 2.75 m, rotation_speed: 48 kt, ground_angle: 2 deg, below_datum: 0.9 m}
   loading:
     empty: {mass: 310 kg, station: 2.02 m, height: 0.11 m}
