@@ -11,6 +11,8 @@ export default class CountsReporter implements Reporter {
       if (module.errors().length > 0) broken++;
     }
     const failed = counts.failed + broken;
-    process.stdout.write(`\n${counts.passed} passed, ${failed} failed, ${counts.skipped + counts.pending} skipped\n`);
+    process.stdout.write(
+      `\n${counts.passed} passed, ${failed} failed, ${counts.skipped + counts.pending} skipped\n`,
+    );
   }
 }

@@ -7,6 +7,7 @@ export default defineConfig({
     hookTimeout: 120_000,
     // Tests start worker threads and whole runs of the program; each file gets a process of its own.
     pool: 'forks',
+    setupFiles: ['./test/fast-check-seed.ts'],
     reporters: ['default', './test/counts-reporter.ts'],
   },
 });

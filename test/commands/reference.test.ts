@@ -101,7 +101,7 @@ describe('schema', () => {
   });
 });
 
-const commands = ['run', 'check', 'worksheet', 'charts', 'figures', 'schema', 'new'];
+const commands = ['run', 'check', 'worksheet', 'charts', 'figures', 'schema', 'new', 'flight-test'];
 
 describe.concurrent('help', () => {
   test('lists the commands', async () => {
