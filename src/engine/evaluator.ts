@@ -70,6 +70,7 @@ export class Evaluator {
     const count = this.chooseRows(from, to);
     if (count === 0) return 0;
     const rows = from === 0 && count === this.tiles.shape.rows ? null : this.rows;
+    this.tiles.tick++;
     for (let index = this.skipStageCount; index < this.memories.length; index++) {
       this.memories[index].evaluate(rows, count);
     }

@@ -51,7 +51,7 @@ export class StageMemory {
     this.outputs = stage.writes.map((name) =>
       name === null ? null : tiles.declare(name, new Float64Array(0), this.space, this.perRow),
     );
-    this.gathered = stage.reads.map(() => new Float64Array(this.entries));
+    this.gathered = stage.reads.map(() => new Float64Array(this.perRow ? 0 : this.entries));
     this.inputMaps = this.sources.map((source) => this.mapFrom(source));
     this.inputs = [...this.gathered];
   }
@@ -78,14 +78,9 @@ export class StageMemory {
   }
 
   private evaluateRows(rows: Int32Array | null, count: number): void {
+    const { tick, shape } = this.tiles;
     for (let k = 0; k < this.sources.length; k++) {
-      const source = this.sources[k];
-      if (source.compact || (rows === null && source.map === null)) {
-        this.inputs[k] = source.values;
-      } else {
-        source.copyRows(rows, count, this.gathered[k], 0);
-        this.inputs[k] = this.gathered[k];
-      }
+      this.inputs[k] = this.sources[k].forRows(rows, count, tick, shape.rows);
     }
     this.slots[0] ??= this.newColumns();
     this.stage.kernel(count, this.inputs, this.slots[0]);

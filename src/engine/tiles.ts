@@ -10,6 +10,13 @@ import { rowMap, tileShape } from './tile.ts';
 export class FigureSource {
   /** Values over the figure's own space, or one per kept row when `compact`. */
   values: Float64Array;
+  /** The figure for the kept rows, gathered once for all stages that read it. */
+  private gathered = new Float64Array(0);
+  /** For which rows `gathered` stands; of a figure that stands still, how far it is filled and with what. */
+  private gatheredAt = -1;
+  private filled = 0;
+  private filledWith = Number.NaN;
+
   constructor(
     values: Float64Array,
     /** Axes of the space, slowest first. */
@@ -20,6 +27,31 @@ export class FigureSource {
     readonly compact: boolean,
   ) {
     this.values = values;
+  }
+
+  /**
+   * The figure for the kept rows, not to be written; valid until the rows change.
+   * @param rows kept rows of the tile, all of them when null
+   * @param tick number of this choice of rows
+   * @param most rows of a full tile
+   */
+  forRows(rows: Int32Array | null, count: number, tick: number, most: number): Float64Array {
+    if (this.compact || (this.map === null && rows === null)) return this.values;
+    if (this.gatheredAt === tick) return this.gathered;
+    if (this.gathered.length === 0) this.gathered = new Float64Array(most);
+    if (this.space.length === 0) this.fill(count);
+    else this.copyRows(rows, count, this.gathered, 0);
+    this.gatheredAt = tick;
+    return this.gathered;
+  }
+
+  /** Fills the gathered column of a figure that stands still, as far as it is not filled with that value already. */
+  private fill(count: number): void {
+    const value = this.values[0];
+    if (Object.is(value, this.filledWith) && count <= this.filled) return;
+    this.gathered.fill(value, 0, count);
+    this.filled = count;
+    this.filledWith = value;
   }
 
   /** Copies the figure for the kept rows (all rows of the tile when null) into a column. */
@@ -46,6 +78,8 @@ export class Tiles {
   /** Positions of the prefix axes, slowest first. */
   readonly digits: Int32Array;
   chunk = 0;
+  /** Number of the present choice of rows. */
+  tick = 0;
   private prefix = -1;
   private readonly sources = new Map<string, FigureSource>();
   private readonly standing: {
