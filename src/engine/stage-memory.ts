@@ -113,12 +113,24 @@ export class StageMemory {
     return this.usesChunk ? key * this.tiles.shape.chunks + this.tiles.chunk : key;
   }
 
+  /**
+   * Settings that come round again, as far as memory allows. Going through the combinations, a standing
+   * axis that the stage does not depend on brings back the settings of its faster ones; those of its
+   * slower axes are never met again. Keys are counted with the faster axes last, so that the settings of
+   * one round fall into slots of their own.
+   */
   private slotCount(): number {
     if (this.perRow) return 1;
     const { axes } = this.tiles.plan;
-    const settings =
-      this.ownPrefix.reduce((product, axis) => product * axes[axis].size, 1) *
-      (this.usesChunk ? this.tiles.shape.chunks : 1);
+    const { suffixStart, chunks } = this.tiles.shape;
+    const own = new Set(this.ownPrefix);
+    let missed = false;
+    let settings = 1;
+    for (let axis = 0; axis < suffixStart; axis++) {
+      if (!own.has(axis)) missed = true;
+      else if (missed) settings *= axes[axis].size;
+    }
+    if (missed && this.usesChunk) settings *= chunks;
     const bytes = 8 * this.entries * Math.max(1, this.stage.writes.length);
     return Math.max(1, Math.min(settings, Math.floor(memoryPerStage / bytes)));
   }

@@ -166,8 +166,17 @@ cg: [{forward: 20 %, aft: 29 %}, {forward: 28 %, aft: 38 %}]`;
     const once = rows[stage];
     evaluate();
     expect(rows[stage]).toBeGreaterThan(once);
+  });
+
+  it('holds nothing of settings that never come round again', () => {
+    const { plan, rows, evaluate } = counted(study);
     const planform = plan.stages.findIndex(({ name }) => name === 'wing planform');
+    expect([...plan.axesOfStage[planform]].sort()).toEqual([0, 1]);
+    evaluate();
     expect(rows[planform]).toBe(settings(plan, planform));
+    // Going through once more, each is worked out once more: only the last one was held.
+    evaluate();
+    expect(rows[planform]).toBe(2 * settings(plan, planform));
   });
 
   it('gives right answers after what was remembered had to go', () => {
