@@ -5,6 +5,7 @@ export type Dimension =
   | 'length'
   | 'area'
   | 'mass'
+  | 'mass_per_area'
   | 'speed'
   | 'angle'
   | 'per_angle'

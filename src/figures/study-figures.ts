@@ -1,4 +1,5 @@
-import type { Sizing, Study } from '../study/study.ts';
+import type { LoadingChoices, Sizing, Study } from '../study/study.ts';
+import { loadingFigures } from './catalogue/loading-figures.ts';
 import type { FigureName } from './catalogue.ts';
 import { catalogueFigure, figureNames } from './catalogue.ts';
 import { conditionFigureName, isConditionFigure } from './condition-figures.ts';
@@ -46,21 +47,25 @@ function chosenWording(study: Study): Partial<Record<FigureName, Wording>> {
     },
     downwash_gradient: { formula: methods.downwash === 'torenbeek' ? 'ε_α = ε_α,T' : 'ε_α = ε_α,H' },
     body_moment_slope: bodyWording(study),
-    ...(study.loading === undefined ? {} : loadedWording),
+    ...(study.loading === undefined ? {} : loadedWording(study.loading)),
   };
 }
 
-/** Ends of a CG range that follows from masses. */
-const loadedWording: Partial<Record<FigureName, Wording>> = {
-  cg_forward_station: {
-    formula: 'x_fwd = min of Σ m x/Σ m over all loading cases and every break of what burns in them',
-    source: 'exact',
-  },
-  cg_aft_station: {
-    formula: 'x_aft = max of Σ m x/Σ m over all loading cases and every break of what burns in them',
-    source: 'exact',
-  },
-};
+/** A CG range that follows from masses, and the masses of it that follow from the geometry. */
+function loadedWording({ items }: LoadingChoices): Partial<Record<FigureName, Wording>> {
+  const masses = items.flatMap(({ massAs, carriedBy }, index) =>
+    massAs === 'mass' ? [] : [`m_${index + 1} = m_S${index + 1} ${carriedBy === 'wing' ? 'S' : 'S_t'}`],
+  );
+  const formula = (text: string) => [text, ...masses].join('; ');
+  const travel = 'Σ m x/Σ m over all loading cases and every break of what burns in them';
+  const { mass, cg_above_datum: height } = loadingFigures;
+  return {
+    cg_forward_station: { formula: formula(`x_fwd = min of ${travel}`), source: 'exact' },
+    cg_aft_station: { formula: formula(`x_aft = max of ${travel}`), source: 'exact' },
+    mass: { formula: formula(mass.formula) },
+    cg_above_datum: { formula: formula(height.formula) },
+  };
+}
 
 function bodyWording(study: Study): Wording {
   if (study.body === undefined)

@@ -3,6 +3,16 @@ import { loadingExtremes } from '../methods/loading.ts';
 import type { LoadingChoices, LoadingItem, Study } from '../study/study.ts';
 import type { BaselinePlaces } from './body.ts';
 
+/** What a mass per area is multiplied with; an item with a mass of its own is given the area 1. */
+const areaFigures = [undefined, 'wing_area', 'tail_area'] as const;
+
+/** Index into `areaFigures` of each item. */
+function areaIndices(items: readonly LoadingItem[]): Int8Array {
+  return Int8Array.from(items, ({ massAs, carriedBy }) =>
+    massAs === 'mass' ? 0 : areaFigures.indexOf(carriedBy === 'wing' ? 'wing_area' : 'tail_area'),
+  );
+}
+
 /** Reads mass and one more number (a place or a height) of the empty aeroplane and of every item, one after the other. */
 export class ItemReader {
   readonly reads: readonly string[];
@@ -13,6 +23,10 @@ export class ItemReader {
   emptyMass = 0;
   emptyOther = 0;
   private readonly first: number;
+  private readonly areaOf: Int8Array;
+  /** Places of the areas among the inputs; −1 for one that is not read. */
+  private readonly areaInputs: readonly number[];
+  private readonly areas = new Float64Array(areaFigures.length).fill(1);
 
   constructor(
     private readonly loading: LoadingChoices,
@@ -21,25 +35,33 @@ export class ItemReader {
   ) {
     const empty = loading.empty ? ['loading_empty_mass', `loading_empty_${emptyOther}`] : [];
     this.first = empty.length;
-    this.reads = [
+    const reads = [
       ...empty,
       ...loading.items.flatMap((item, index) => {
         const figure = `loading_items_${index + 1}`;
-        return [`${figure}_mass`, `${figure}_${itemOther(item)}`];
+        return [`${figure}_${item.massAs}`, `${figure}_${itemOther(item)}`];
       }),
     ];
+    this.areaOf = areaIndices(loading.items);
+    this.areaInputs = areaFigures.map((figure, index) =>
+      figure === undefined || !this.areaOf.includes(index) ? -1 : reads.push(figure) - 1,
+    );
+    this.reads = reads;
     this.masses = new Float64Array(loading.items.length);
     this.others = new Float64Array(loading.items.length);
   }
 
   read(inputs: readonly Float64Array[], row: number): void {
-    const { masses, others, first } = this;
+    const { masses, others, first, areaOf, areaInputs, areas } = this;
     if (this.loading.empty) {
       this.emptyMass = inputs[0][row];
       this.emptyOther = inputs[1][row];
     }
+    for (let k = 0; k < areas.length; k++) {
+      if (areaInputs[k] >= 0) areas[k] = inputs[areaInputs[k]][row];
+    }
     for (let i = 0; i < masses.length; i++) {
-      masses[i] = inputs[first + 2 * i][row];
+      masses[i] = inputs[first + 2 * i][row] * areas[areaOf[i]];
       others[i] = inputs[first + 2 * i + 1][row];
     }
   }

@@ -10,8 +10,8 @@ type LoadedStudy = Pick<Study, 'loading' | 'inputs' | 'body' | 'cg'>;
 /**
  * Stages of a study that gives masses instead of a CG range: the CG's travel, the mass of the heaviest
  * case where the study gives none, and the height of its CG where every mass has a height. Structure
- * that grows with the geometry is an item `carried_by: wing` or `tail` whose mass is varied (or tied)
- * beside it; it moves with what carries it in any case.
+ * that grows with the geometry is an item `carried_by: wing` or `tail` with a mass per area; it moves with
+ * what carries it in any case.
  */
 export function loadingStages(study: LoadedStudy, places: BaselinePlaces): Stage[] {
   const { loading } = study;
@@ -85,7 +85,7 @@ function heaviest(reader: ItemReader, cases: readonly CaseItems[]): number {
 /** Mass of the heaviest case, for lift and for whatever else asks for the aeroplane's mass. */
 function massStage(loading: LoadingChoices): Stage {
   // The other number is not needed; the mass read twice keeps the reader plain.
-  const reader = new ItemReader(loading, 'mass', () => 'mass');
+  const reader = new ItemReader(loading, 'mass', ({ massAs }) => massAs);
   const cases = casesOf(loading);
   return {
     name: 'mass of the heaviest case',

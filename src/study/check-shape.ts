@@ -4,7 +4,7 @@ import type { Baseline } from './hold.ts';
 import { findInputDefinition, inputDefinition } from './inputs.ts';
 import { isFault, type Quantity, rangeFault } from './quantities.ts';
 import { fewestStations } from './read-body.ts';
-import { impossibleCase } from './read-loading.ts';
+import { type CarrierAreas, impossibleCase } from './read-loading.ts';
 import type { PlacedAxis } from './read-vary.ts';
 import type { Reading } from './reading.ts';
 import type { Span } from './source.ts';
@@ -97,7 +97,7 @@ export function checkVariedShape(
   checkVariedTail(axes, baseline, reading);
   checkVariedCounts(axes, reading);
   checkVariedFlaps(axes, reading);
-  checkVariedLoading(axes, choices, reading);
+  checkVariedLoading(axes, choices, baseline, reading);
   checkVariedBodyEnd(axes, body, baseline, reading);
   checkVariedCg(axisOf('cg.forward'), axisOf('cg.aft'), choices, baseline, reading);
 }
@@ -195,13 +195,37 @@ function checkVariedFlaps(axes: readonly PlacedAxis[], reading: Reading): void {
   }
 }
 
+/** Areas of wing and tail at the fixed values [m²]. */
+export function carrierAreas({ wing, tail }: Baseline): CarrierAreas {
+  return { wing: wing.sizes['wing.area'], tail: tail['tail.area'] };
+}
+
+/** Areas of wing and tail that no axis can change; NaN for one that may be different elsewhere. */
+function steadyAreas(axes: readonly PlacedAxis[], baseline: Baseline): CarrierAreas {
+  const varies = (surface: string) =>
+    axes.some((axis) => axis.paths.some((path) => path.startsWith(`${surface}.`)));
+  const { wing, tail } = carrierAreas(baseline);
+  const wingVaries = varies('wing');
+  // a tail's area may follow from the wing's sizes and place
+  return {
+    wing: wingVaries ? Number.NaN : wing,
+    tail: wingVaries || varies('tail') ? Number.NaN : tail,
+  };
+}
+
 /** A loading case that one axis alone makes heavier than the greatest mass. */
-function checkVariedLoading(axes: readonly PlacedAxis[], { loading }: Choices, reading: Reading): void {
+function checkVariedLoading(
+  axes: readonly PlacedAxis[],
+  { loading }: Choices,
+  baseline: Baseline,
+  reading: Reading,
+): void {
   if (!loading) return;
-  const isMass = (path: string) => /^loading\.(at_most$|.*\.mass$)/.test(path);
+  const isMass = (path: string) => /^loading\.(at_most$|.*\.mass(_per_area)?$)/.test(path);
+  const areas = steadyAreas(axes, baseline);
   for (const axis of axes.filter((one) => one.paths.some(isMass))) {
     for (const { span, at } of rowsOf(axis, axis.paths.filter(isMass))) {
-      const heavy = impossibleCase(loading, (path) => at.get(path) ?? reading.inputs.get(path));
+      const heavy = impossibleCase(loading, areas, (path) => at.get(path) ?? reading.inputs.get(path));
       if (!heavy) continue;
       const found = `With this value ${heavy}`;
       reading.faults.add('OUT_OF_RANGE', span, found, 'Leave the value out, or carry less in that case.');

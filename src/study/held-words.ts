@@ -3,7 +3,7 @@ import { showValue } from '../figures/display.ts';
 import { inputDefinition } from './inputs.ts';
 import { tailPairs } from './read-tail.ts';
 import { wingSizes } from './read-wing.ts';
-import type { Axis, CgKind, Held, ShowSystem } from './study.ts';
+import type { Axis, CgKind, Held, LoadingItem, ShowSystem } from './study.ts';
 import type { Choices } from './varied-paths.ts';
 
 interface Dependants {
@@ -56,9 +56,20 @@ function other(pair: readonly string[], given: string): string {
 }
 
 /** What of the tail follows when its size in m² changes, or only its measure against the wing. */
-function tailSizeFollows({ tail }: Choices, areaChanges: boolean): string[] {
+function tailSizeFollows({ tail, loading }: Choices, areaChanges: boolean): string[] {
   const size = other(tailPairs.size, tail.size);
-  return areaChanges ? [size, other(tailPairs.planform, tail.planform)] : [size];
+  if (!areaChanges) return [size];
+  return [size, other(tailPairs.planform, tail.planform), ...massesFollow('tail', loading)];
+}
+
+/** Masses that follow the area of wing or tail, in words. */
+function massesFollow(carrier: 'wing' | 'tail', loading: Choices['loading']): string[] {
+  const items = perArea(loading).filter((item) => item.carriedBy === carrier);
+  return items.map((item) => `mass of loading.items.${item.name}`);
+}
+
+function perArea(loading: Choices['loading']): LoadingItem[] {
+  return (loading?.items ?? []).filter((item) => item.massAs === 'mass_per_area');
 }
 
 function tailDependants(path: string, choices: Choices): Dependants | undefined {
@@ -98,6 +109,7 @@ function sizeDependants(path: string, choices: Choices): Dependants {
   // area, span and aspect ratio settle each other: a taper then moves only the root chord
   const chordOnly = !isSize && !isWidth && !wing.given.includes('wing.root_chord');
   const free = wingSizes.filter((size) => !wing.given.includes(size) && !(spanStays && size === 'wing.span'));
+  const areaChanges = path === 'wing.area' || (!chordOnly && free.includes('wing.area'));
   return {
     held: [...wing.given, ...tailGiven(choices)],
     also: cgWords(choices),
@@ -106,6 +118,7 @@ function sizeDependants(path: string, choices: Choices): Dependants {
       'mean aerodynamic chord',
       ...tailSizeFollows(choices, tail.size === 'volume'),
       other(tailPairs.place, tail.place),
+      ...(areaChanges ? massesFollow('wing', choices.loading) : []),
     ],
   };
 }
@@ -114,7 +127,8 @@ function cgWords({ cg, loading }: Choices): string[] {
   if (loading) {
     const carriers = new Set(loading.items.map((item) => item.carriedBy).filter((by) => by !== 'station'));
     const riding = carriers.size > 0 ? ` (items carried by ${[...carriers].join(' and ')} ride along)` : '';
-    return [`the masses and stations of the loading${riding}`];
+    const held = perArea(loading).length > 0 ? 'masses, masses per area' : 'masses';
+    return [`the ${held} and stations of the loading${riding}`];
   }
   const words = (end: string, kind: CgKind) => {
     if (kind === 'percent_mac') return `cg.${end} in % MAC (it rides with the wing)`;

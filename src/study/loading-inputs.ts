@@ -32,6 +32,15 @@ export const loadingRows: Row[] = [
     50_000,
     'nothing aboard to a large twin',
   ],
+  [
+    'loading.items[n].mass_per_area',
+    'm_S[n]',
+    'mass_per_area',
+    'Mass of item [n] over the area of the wing or tail that carries it.',
+    0,
+    500,
+    'nothing to far beyond a large twin’s wing',
+  ],
   ['loading.items[n].station', 'x_m[n]', 'length', 'Station of item [n].', -100, 160, datum],
   [
     'loading.items[n].at',

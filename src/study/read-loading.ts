@@ -7,6 +7,7 @@ import type { LoadingCase, LoadingChoices, LoadingItem } from './study.ts';
 
 const mostEntries = 200;
 const carriers = ['wing', 'tail', 'body'] as const;
+type LoadingCarrier = (typeof carriers)[number];
 
 /** Reads `aeroplane.loading` into the inputs; undefined where the study gives none. */
 export function readLoading(aeroplane: SourceNode, reading: Reading): LoadingChoices | undefined {
@@ -70,8 +71,8 @@ function readItem(
   const prefix = `loading.items[${number}]`;
   const word = wordIn(map, 'carried_by');
   const carrier = carriers.find((one) => one === word);
-  for (const one of ['mass', 'height', carrier ? 'at' : 'station'])
-    reading.take(map, one, `${prefix}.${one}`);
+  const massAs = readItemMass(name, map, prefix, carrier, reading);
+  for (const one of ['height', carrier ? 'at' : 'station']) reading.take(map, one, `${prefix}.${one}`);
   const [wanted, other] = carrier ? ['at', 'station'] : ['station', 'at'];
   if (map.kind === 'map' && !valueIn(map, wanted)) {
     const found = `loading.items.${name} has no ${wanted}${carrier ? `, a fraction of what carries it` : ''}.`;
@@ -88,7 +89,64 @@ function readItem(
     reading.faults.add('MISSING_KEY', keySpan(map, 'carried_by'), found, 'Give its station, or a body.');
   }
   const burns = valueIn(map, 'burns');
-  return { name, carriedBy: carrier ?? 'station', burns: burns?.kind === 'scalar' && burns.value === true };
+  return {
+    name,
+    massAs,
+    carriedBy: carrier ?? 'station',
+    burns: burns?.kind === 'scalar' && burns.value === true,
+  };
+}
+
+/** The item's mass, or its mass per area of the wing or tail that carries it. */
+function readItemMass(
+  name: string,
+  map: SourceNode,
+  prefix: string,
+  carrier: LoadingCarrier | undefined,
+  reading: Reading,
+): LoadingItem['massAs'] {
+  if (!valueIn(map, 'mass_per_area')) {
+    reading.take(map, 'mass', `${prefix}.mass`);
+    if (map.kind === 'map' && !valueIn(map, 'mass')) {
+      const where = `aeroplane.loading.items.${name}`;
+      const keys = carrier === 'wing' || carrier === 'tail' ? 'mass: or mass_per_area:' : 'mass:';
+      const remedy = `Add ${keys} to ${where}.`;
+      reading.faults.addBeside('MISSING_KEY', firstOf(map), `${where} has no mass.`, remedy);
+    }
+    return 'mass';
+  }
+  checkMassPerArea(name, map, carrier, reading);
+  if (valueIn(map, 'mass')) {
+    const found = `loading.items.${name} gives mass and mass_per_area.`;
+    reading.faults.add('OVERDETERMINED', keySpan(map, 'mass_per_area'), found, 'Keep one of them.');
+    reading.take(map, 'mass', `${prefix}.mass`);
+    return 'mass';
+  }
+  reading.take(map, 'mass_per_area', `${prefix}.mass_per_area`);
+  return 'mass_per_area';
+}
+
+/** Whether there is an area that the mass per area can be multiplied with, and nothing burns. */
+function checkMassPerArea(
+  name: string,
+  map: SourceNode,
+  carrier: LoadingCarrier | undefined,
+  reading: Reading,
+): void {
+  const item = `loading.items.${name}`;
+  if (!valueIn(map, 'carried_by')) {
+    const found = `${item} gives mass_per_area, and no wing or tail carries it.`;
+    const remedy = 'Add carried_by: wing or tail with at:, or give its mass.';
+    reading.faults.add('MISSING_KEY', keySpan(map, 'mass_per_area'), found, remedy);
+  } else if (carrier === 'body') {
+    const found = `${item} gives mass_per_area, and the body that carries it has no area to count.`;
+    const remedy = 'Give its mass, or let wing or tail carry it.';
+    reading.faults.add('UNKNOWN_WORD', valueIn(map, 'carried_by')!.span, found, remedy);
+  }
+  const burns = valueIn(map, 'burns');
+  if (burns?.kind !== 'scalar' || burns.value !== true) return;
+  const found = `${item} burns, and gives mass_per_area: what burns does not grow with the area.`;
+  reading.faults.add('OVERDETERMINED', keySpan(map, 'burns'), found, 'Give its mass.');
 }
 
 /** Structure that moves with the geometry is part of the empty aeroplane; anything else must be loaded. */
@@ -163,44 +221,85 @@ function tellHeightsLeftOut(items: number, empty: boolean, reading: Reading): vo
 
 type NumberOf = (path: string) => number | undefined;
 
-/** Mass of one case with all aboard [kg]; NaN where a mass has a fault. */
-function caseMass({ items }: LoadingCase, empty: boolean, numberOf: NumberOf): number {
-  const massOf = (path: string) => numberOf(path) ?? Number.NaN;
-  const start = empty ? massOf('loading.empty.mass') : 0;
-  return items.reduce((sum, number) => sum + massOf(`loading.items[${number}].mass`), start);
+/** Areas that a mass per area is multiplied with [m²]; NaN where it is not known when the study is read. */
+export interface CarrierAreas {
+  readonly wing: number;
+  readonly tail: number;
+}
+
+/** Mass of one item [kg]: NaN where its number has a fault, undefined where its area is not known. */
+function itemMass(
+  { massAs, carriedBy }: LoadingItem,
+  number: number,
+  areas: CarrierAreas,
+  numberOf: NumberOf,
+): number | undefined {
+  const given = numberOf(`loading.items[${number}].${massAs}`) ?? Number.NaN;
+  if (massAs === 'mass') return given;
+  const area = areas[carriedBy === 'wing' ? 'wing' : 'tail'];
+  return area > 0 ? given * area : undefined;
+}
+
+/** What is known of the mass of one case with all aboard [kg], and whether that is all of it. */
+function caseMass(
+  one: LoadingCase,
+  { empty, items }: LoadingChoices,
+  areas: CarrierAreas,
+  numberOf: NumberOf,
+): { readonly mass: number; readonly whole: boolean } {
+  const start = empty ? (numberOf('loading.empty.mass') ?? Number.NaN) : 0;
+  const masses = one.items.map((number) => itemMass(items[number - 1]!, number, areas, numberOf));
+  return {
+    mass: masses.reduce<number>((sum, mass) => sum + (mass ?? 0), start),
+    whole: !masses.includes(undefined),
+  };
 }
 
 /** A sum of masses misses its limit by rounding alone [kg]. */
 const massTolerance = 1e-9;
 
 /** What is wrong with the mass of one case, in words; undefined where nothing is. */
-function massFault(one: LoadingCase, empty: boolean, numberOf: NumberOf): string | undefined {
-  const mass = caseMass(one, empty, numberOf);
+function massFault(
+  one: LoadingCase,
+  loading: LoadingChoices,
+  areas: CarrierAreas,
+  numberOf: NumberOf,
+): string | undefined {
+  const { mass, whole } = caseMass(one, loading, areas, numberOf);
   const most = numberOf('loading.at_most') ?? Number.POSITIVE_INFINITY;
   const kilograms = (value: number) => `${Number(value.toFixed(3))} kg`;
-  if (mass <= 0) return `the loading case ${one.name} has no mass.`;
+  if (mass <= 0 && whole) return `the loading case ${one.name} has no mass.`;
   if (!(mass > most + massTolerance)) return undefined;
-  return `the loading case ${one.name} has a mass of ${kilograms(mass)}, and at_most is ${kilograms(most)}.`;
+  const least = whole ? '' : 'at least ';
+  return `the loading case ${one.name} has a mass of ${least}${kilograms(mass)}, and at_most is ${kilograms(most)}.`;
 }
 
 /** The first case whose mass is impossible, in words. */
-export function impossibleCase({ cases, empty }: LoadingChoices, numberOf: NumberOf): string | undefined {
-  for (const one of cases) {
-    const fault = massFault(one, empty, numberOf);
+export function impossibleCase(
+  loading: LoadingChoices,
+  areas: CarrierAreas,
+  numberOf: NumberOf,
+): string | undefined {
+  for (const one of loading.cases) {
+    const fault = massFault(one, loading, areas, numberOf);
     if (fault) return fault;
   }
   return undefined;
 }
 
-/** Cases heavier than the stated greatest mass, or without any mass, at the fixed values. */
+/**
+ * Cases heavier than the stated greatest mass, or without any mass, at the fixed values.
+ * @param areas those of the fixed values
+ */
 export function checkCaseMasses(
   aeroplane: SourceNode,
-  { cases, empty }: LoadingChoices,
+  loading: LoadingChoices,
+  areas: CarrierAreas,
   reading: Reading,
 ): void {
   const map = mapIn(mapIn(aeroplane, 'loading'), 'cases');
-  for (const one of cases) {
-    const fault = massFault(one, empty, (path) => reading.inputs.get(path));
+  for (const one of loading.cases) {
+    const fault = massFault(one, loading, areas, (path) => reading.inputs.get(path));
     const entry = map?.entries.get(one.name);
     if (!fault || !entry) continue;
     const found = fault[0]!.toUpperCase() + fault.slice(1);

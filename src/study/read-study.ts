@@ -1,5 +1,5 @@
 import { tailBaseline, wingBaseline } from './baseline.ts';
-import { checkCg, checkDerivedSizes, checkTailPlace, checkVariedShape } from './check-shape.ts';
+import { carrierAreas, checkCg, checkDerivedSizes, checkTailPlace, checkVariedShape } from './check-shape.ts';
 import { FaultList } from './fault-list.ts';
 import { describeHeld } from './held-words.ts';
 import { applyHolds } from './hold.ts';
@@ -134,7 +134,7 @@ function readAeroplane(
   checkDerivedSizes(given, baseline, reading);
   checkTailPlace(given, body, baseline, reading);
   checkCg(given, baseline, reading);
-  if (loading) checkCaseMasses(map, loading, reading);
+  if (loading) checkCaseMasses(map, loading, carrierAreas(baseline), reading);
   const { axes, holds } = readVary(root, given, reading);
   checkVariedShape(axes, given, body, baseline, reading);
   const conditions = withFlapsSettled(named, axes, reading);

@@ -72,7 +72,8 @@ export const landingGear = z
 
 const loadingItem = z
   .strictObject({
-    mass: input('loading.items[n].mass'),
+    mass: optionalInput('loading.items[n].mass'),
+    mass_per_area: optionalInput('loading.items[n].mass_per_area'),
     station: optionalInput('loading.items[n].station'),
     carried_by: z
       .enum(['wing', 'tail', 'body'])
@@ -82,7 +83,7 @@ const loadingItem = z
     height: optionalInput('loading.items[n].height'),
     burns: z.boolean().meta({ description: 'true for what is used up in flight.' }).optional(),
   })
-  .meta({ description: 'One item: its mass and where it lies.' });
+  .meta({ description: 'One item: its mass, or its mass per area of what carries it, and where it lies.' });
 
 export const loading = z
   .strictObject({

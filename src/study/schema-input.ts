@@ -13,6 +13,7 @@ const examples: Record<Dimension, readonly (string | number)[]> = {
   area: ['11.4 m^2', '123 ft^2'],
   volume: ['0.5 m^3', '18 ft^3'],
   mass: ['610 kg', '1340 lb'],
+  mass_per_area: ['5.5 kg/m^2', '1.1 lb/ft^2'],
   speed: ['105 kt', '195 km/h', '54 m/s', '121 mph'],
   angle: ['3 deg', '0.05 rad'],
   per_angle: ['6.1 /rad', '0.106 /deg'],

@@ -49,8 +49,9 @@ aeroplane:                          # the fixed values are the baseline of the s
   #landing_gear: {kind: nose_wheel, main_wheels: 2.6 m, rotation_speed: 48 kt}
   # Masses in place of mass and cg above: then the range of the centre of gravity follows.
   #loading:
-  #  empty: {mass: 390 kg, station: 2.1 m}
+  #  empty: {mass: 326 kg, station: 2.04 m}
   #  items:
+  #    wing: {mass_per_area: 5.5 kg/m^2, carried_by: wing, at: 40 %}   # grows with the wing
   #    crew: {mass: 160 kg, station: 2.3 m}
   #    fuel: {mass: 60 kg, station: 2.5 m, burns: true}
   #  cases:

@@ -121,9 +121,14 @@ export interface LandingGearChoices {
   readonly kind: 'nose_wheel' | 'tail_wheel';
 }
 
-/** Item n of `loading.items`, from 1 in the order of the file: input `loading.items[n].mass`. */
+/** Item n of `loading.items`, from 1 in the order of the file. */
 export interface LoadingItem {
   readonly name: string;
+  /**
+   * `mass`: input `loading.items[n].mass`. `mass_per_area`: input `.mass_per_area`, to be multiplied with
+   * the area of the wing or of the tail, whichever carries the item; never of one that burns.
+   */
+  readonly massAs: 'mass' | 'mass_per_area';
   /** `station`: input `.station`; otherwise input `.at`, a fraction of MAC, tail MAC or body length. */
   readonly carriedBy: 'station' | 'wing' | 'tail' | 'body';
   /** Used up in flight. */

@@ -9,6 +9,7 @@ export type UnitKind =
   | 'area'
   | 'volume'
   | 'mass'
+  | 'mass_per_area'
   | 'speed'
   | 'angle'
   | 'per_angle'
@@ -40,6 +41,7 @@ const si: readonly (readonly [Exclude<UnitKind, 'other'>, string])[] = [
   ['area', 'm^2'],
   ['volume', 'm^3'],
   ['mass', 'kg'],
+  ['mass_per_area', 'kg/m^2'],
   ['speed', 'm/s'],
   ['angle', 'rad'],
   ['per_angle', 'rad^-1'],

@@ -77,11 +77,21 @@ function settledBy(path: string, choices: Choices, reading: Reading): Settled | 
   }
   if (choices.loading && /^(mass$|cg\.)/.test(path))
     return { given: ['the loading'], remedy: 'Vary masses or stations of the loading.' };
+  const mass = itemMassInPlace(path, choices.loading);
+  if (mass) return { given: [mass], remedy: `Vary ${mass}, or give ${key} in its place.` };
   const condition = /^(conditions\[\d+\])\./.exec(path)?.[1];
   const speed = speedKeys.find((other) => reading.inputs.has(`${condition}.${other}`));
   if (!condition || !speed || !(speedKeys as readonly string[]).includes(key)) return undefined;
   const given = `${condition}.${speed}`;
   return { given: [given], remedy: `Vary ${given}, or give ${key} in the condition in its place.` };
+}
+
+/** Of an item's mass and its mass per area the one that the study gives, when the path names the other. */
+function itemMassInPlace(path: string, loading: Choices['loading']): string | undefined {
+  const [, entry, number, key] = /^(loading\.items\[(\d+)\])\.(mass|mass_per_area)$/.exec(path) ?? [];
+  const item = loading?.items[Number(number) - 1];
+  const hasArea = item?.carriedBy === 'wing' || item?.carriedBy === 'tail';
+  return item && hasArea && item.massAs !== key ? `${entry}.${item.massAs}` : undefined;
 }
 
 function givenSizes(path: string, { wing, tail }: Choices): string[] | undefined {

@@ -15,9 +15,9 @@ const loading = `  loading:
     cases: {solo: [pilot], trip: [pilot, tank]}
     at_most: 600 kg`;
 
-function diagram(show: 'metric' | 'US') {
+function diagram(show: 'metric' | 'US', loadingText = loading) {
   const text = studyText({ head: `title: Test aeroplane\nshow: ${show}`, cg: '' })
-    .replace(/^ {2}cg: $/m, loading)
+    .replace(/^ {2}cg: $/m, loadingText)
     .replace(/^ {2}mass: .*\n/m, '');
   const study = readStudyText(text, 'loaded.yaml');
   const laidOut = layOut(study);
@@ -60,4 +60,17 @@ it('shows mass and station in the study’s units', () => {
   // One pound is 0.45359237 kg and one foot 0.3048 m, both exact (common practice, no source).
   expect(data.empty.mass).toBeCloseTo(460 / 0.45359237, 9);
   expect(data.station.chord).toBeCloseTo(at('mac') / 0.3048, 9);
+});
+
+it('draws masses that follow the area as those of the combination', () => {
+  const { data, at } = diagram('metric', loading.replace('mass: 60 kg', 'mass_per_area: 6 kg/m^2'));
+  const spar = 6 * at('wing_area');
+  expect(data.empty.mass).toBeCloseTo(400 + spar, 9);
+  expect(data.cases[1].states.map(({ mass }) => mass)).toEqual([
+    expect.closeTo(400 + spar + 85 + 44, 9),
+    expect.closeTo(400 + spar + 85, 9),
+  ]);
+  const cgs = data.cases.flatMap(({ states }) => states.map(({ cg }) => cg));
+  expect(Math.min(...cgs)).toBeCloseTo(100 * at('cg_forward'), 9);
+  expect(Math.max(...cgs)).toBeCloseTo(100 * at('cg_aft'), 9);
 });

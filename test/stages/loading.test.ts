@@ -7,7 +7,7 @@ import { baselinePlaces, buildStages } from '../../src/stages/build-stages.ts';
 import { loadingPaths } from '../../src/stages/loading-paths.ts';
 import type { Study } from '../../src/study/study.ts';
 import type { StudyParts } from '../studies.ts';
-import { studyText } from '../studies.ts';
+import { replaced, studyText } from '../studies.ts';
 import { figure, figuresOf } from './aeroplane.ts';
 
 const loading = `empty: {mass: 372 kg, station: 2.06 m, height: 0.1 m}
@@ -273,7 +273,165 @@ describe('masses that something carries', () => {
   });
 });
 
+const growing = `empty: {mass: 260 kg, station: 1.9 m, height: 0.1 m}
+items:
+  pilot: {mass: 90 kg, station: 2.3 m, height: 0.2 m}
+  wing_shell: {mass_per_area: 5.5 kg/m^2, carried_by: wing, at: 40 %, height: -0.3 m}
+  tail_shell: {mass_per_area: 7.25 kg/m^2, carried_by: tail, at: 55 %, height: 0.6 m}
+  tank: {mass: 48 kg, station: 2.6 m, height: -0.1 m, burns: true}
+  flaps: {mass_per_area: 0.8 kg/m^2, carried_by: wing, at: 90 %, height: -0.35 m}
+cases:
+  solo: [pilot]
+  trip: [pilot, tank, flaps]`;
+
+const growingFigures = [
+  'mass',
+  'cg_above_datum',
+  'cg_forward_station',
+  'cg_aft_station',
+  'wing_area',
+  'tail_area',
+  'mac',
+  'mac_leading_edge',
+  'quarter_mac_station',
+  'tail_arm',
+  'tail_mac',
+] as const;
+
+/** Mass, height and CG range of the loading above, one case and break after the other. */
+function plainGrowing(at: (name: (typeof growingFigures)[number]) => number) {
+  const [S, tail, mac, edge] = [at('wing_area'), at('tail_area'), at('mac'), at('mac_leading_edge')];
+  const tailEdge = at('quarter_mac_station') + at('tail_arm') - at('tail_mac') / 4;
+  const bare = [
+    { mass: 260, station: 1.9, height: 0.1 },
+    { mass: 5.5 * S, station: edge + 0.4 * mac, height: -0.3 },
+    { mass: 7.25 * tail, station: tailEdge + 0.55 * at('tail_mac'), height: 0.6 },
+  ];
+  const pilot = { mass: 90, station: 2.3, height: 0.2 };
+  const tank = { mass: 48, station: 2.6, height: -0.1 };
+  const flaps = { mass: 0.8 * S, station: edge + 0.9 * mac, height: -0.35 };
+  const mean = (all: readonly PlainItem[], key: 'station' | 'height') =>
+    all.reduce((sum, one) => sum + one.mass * one[key], 0) / all.reduce((sum, one) => sum + one.mass, 0);
+  const full = [...bare, pilot, tank, flaps];
+  const states = [[...bare, pilot], full, [...bare, pilot, flaps]].map((all) => mean(all, 'station'));
+  return {
+    mass: full.reduce((sum, one) => sum + one.mass, 0),
+    cg_above_datum: mean(full, 'height'),
+    cg_forward_station: Math.min(...states),
+    cg_aft_station: Math.max(...states),
+  };
+}
+
+describe('masses that follow the area of what carries them', () => {
+  const study = loadedStudy(growing);
+  const figures = figuresOf(study);
+
+  it('are those of a plain loop in every row, whatever the row before', () => {
+    const axes = [
+      { name: 'area', paths: ['wing.area'], values: [Float64Array.of(11.4, 22.8, 9.1)] },
+      { name: 'volume', paths: ['tail.volume'], values: [Float64Array.of(0.9, 0.3)] },
+      { name: 'arm', paths: ['tail.arm'], values: [Float64Array.of(3.9, 4.6)] },
+    ];
+    const columns = evaluateSlice(study, buildStages(study), axes, growingFigures);
+    const column = (name: string) => columns.get(name) ?? new Float64Array();
+    expect(column('mass')).toHaveLength(12);
+    expect(new Set(column('mass')).size).toBe(12);
+    for (let row = 0; row < 12; row++) {
+      for (const [name, value] of Object.entries(plainGrowing((one) => column(one)[row])))
+        expect(column(name)[row], `${name} in row ${row}`).toBeCloseTo(value, close);
+    }
+  });
+
+  it('double with the wing’s area, and draw the CG towards the wing', () => {
+    // The tail keeps its area, its volume against the larger wing follows.
+    const tail = replaced('tail', 'volume: 0.48', 'area: 2 m^2');
+    const text = growing.replace(/ {2}flaps.*\n/, '').replace(', flaps', '');
+    const fixedTail = loadedStudy(text, { tail });
+    const before = figuresOf(fixedTail);
+    const after = moved(fixedTail, 'wing.area', 22.8, growingFigures);
+    expect(figure(before, 'mass')).toBeCloseTo(260 + 5.5 * 11.4 + 7.25 * 2 + 90 + 48, close);
+    expect(figure(after, 'mass') - figure(before, 'mass')).toBeCloseTo(5.5 * 11.4, close);
+    // By hand, moments about the datum with the tank full, in which case the CG is aftmost.
+    const moment = (at: ReadonlyMap<string, number>, area: number) => {
+      const wing = figure(at, 'mac_leading_edge') + 0.4 * figure(at, 'mac');
+      const shell =
+        figure(at, 'quarter_mac_station') + figure(at, 'tail_arm') + (0.55 - 0.25) * figure(at, 'tail_mac');
+      return 260 * 1.9 + 5.5 * area * wing + 7.25 * 2 * shell + 90 * 2.3 + 48 * 2.6;
+    };
+    for (const [at, area] of [
+      [before, 11.4],
+      [after, 22.8],
+    ] as const)
+      expect(figure(at, 'cg_aft_station')).toBeCloseTo(moment(at, area) / figure(at, 'mass'), close);
+  });
+
+  it('are as fixed masses of the same size where nothing varies', () => {
+    const S = figure(figures, 'wing_area');
+    const fixed = growing
+      .replace('mass_per_area: 5.5 kg/m^2', `mass: ${5.5 * S} kg`)
+      .replace('mass_per_area: 0.8 kg/m^2', `mass: ${0.8 * S} kg`)
+      .replace('mass_per_area: 7.25 kg/m^2', `mass: ${7.25 * figure(figures, 'tail_area')} kg`);
+    const same = figuresOf(loadedStudy(fixed));
+    for (const name of ['mass', 'cg_forward', 'cg_aft', 'cg_above_datum', 'neutral_point'])
+      expect(figure(figures, name)).toBeCloseTo(figure(same, name), close);
+  });
+
+  it('vary by themselves', () => {
+    const heavier = moved(study, 'loading.items[2].mass_per_area', 6.5, ['mass']);
+    expect(figure(heavier, 'mass') - figure(figures, 'mass')).toBeCloseTo(
+      figure(figures, 'wing_area'),
+      close,
+    );
+  });
+
+  it('follow a tail that is chosen in each combination', () => {
+    const sized = figuresOf(
+      loadedStudy(growing, {
+        tail: replaced('tail', 'volume: 0.48', 'area: 2 m^2'),
+        rest: 'size: {choose: tail.area, so_that: static_margin_aft, is: 15 %, between: [0.6 m^2, 5 m^2]}\n',
+      }),
+    );
+    expect(figure(sized, 'static_margin_aft')).toBeCloseTo(0.15, 9);
+    expect(figure(sized, 'tail_area')).not.toBeCloseTo(2, 2);
+    const plain = plainGrowing((name) => figure(sized, name));
+    expect(figure(sized, 'mass')).toBeCloseTo(plain.mass, close);
+    expect(figure(sized, 'cg_aft_station')).toBeCloseTo(plain.cg_aft_station, close);
+  });
+
+  it('are told with the formulas that use them, under the symbols of the areas', () => {
+    const { figures: known, columns } = layOut(study);
+    const symbol = (name: string) => known.get(name)?.symbol;
+    const products = [
+      `${symbol('loading_items_2_mass_per_area')?.replace('_S', '_')} = ${symbol('loading_items_2_mass_per_area')} ${symbol('wing_area')}`,
+      `m_3 = m_S3 ${symbol('tail_area')}`,
+      'm_5 = m_S5 S',
+    ].join('; ');
+    for (const name of ['mass', 'cg_above_datum', 'cg_forward_station', 'cg_aft_station'])
+      expect(known.get(name)?.formula, name).toContain(`; ${products}`);
+    expect(columns.find(({ figure: { name } }) => name === 'mass')?.name).toBe('mass_kg');
+    expect(known.get('loading_items_2_mass_per_area')).toMatchObject({
+      dimension: 'mass_per_area',
+      formula: 'given',
+    });
+    expect(known.has('loading_items_2_mass')).toBe(false);
+    expect(layOut(loadedStudy()).figures.get('mass')?.formula).not.toContain('m_S');
+  });
+});
+
 describe('paths of loading cases', () => {
+  it('carry masses that follow the area', () => {
+    const study = loadedStudy(growing);
+    const figures = figuresOf(study);
+    const paths = loadingPaths(study.loading!, study.body, baselinePlaces(study), figures);
+    const plain = plainGrowing((name) => figure(figures, name));
+    expect(paths.cases[1][0].mass).toBeCloseTo(plain.mass, close);
+    const stations = paths.cases.flat().map(({ station }) => station);
+    expect(Math.min(...stations)).toBeCloseTo(plain.cg_forward_station, close);
+    expect(Math.max(...stations)).toBeCloseTo(plain.cg_aft_station, close);
+    const shells = 5.5 * figure(figures, 'wing_area') + 7.25 * figure(figures, 'tail_area');
+    expect(paths.empty.mass).toBeCloseTo(260 + shells, close);
+  });
+
   it('go through the breaks of the burn in order, between the extremes', () => {
     const study = loadedStudy();
     const figures = figuresOf(study);

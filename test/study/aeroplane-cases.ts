@@ -404,6 +404,78 @@ const loadingCases: readonly FaultCase[] = [
     mark: 'carried_by',
   },
   {
+    what: 'an item without a mass',
+    text: inStructure('{carried_by: wing, at: 40 %, height: -0.2 m}'),
+    code: 'MISSING_KEY',
+    mark: 'wing_structure',
+    says: /wing_structure has no mass\. .*mass_per_area/,
+  },
+  {
+    what: 'a mass and a mass per area',
+    text: inStructure('{mass: 70 kg, mass_per_area: 6 kg/m^2, carried_by: wing, at: 40 %, height: -0.2 m}'),
+    code: 'OVERDETERMINED',
+    mark: 'mass_per_area',
+  },
+  {
+    what: 'a mass per area that nothing carries',
+    text: inStructure('{mass_per_area: 6 kg/m^2, station: 2.4 m, height: -0.2 m}').replace(
+      'two_up: [pilot',
+      'two_up: [wing_structure, pilot',
+    ),
+    code: 'MISSING_KEY',
+    mark: 'mass_per_area',
+    says: /no wing or tail/,
+  },
+  {
+    what: 'a mass per area that the body carries',
+    text: inStructure('{mass_per_area: 6 kg/m^2, carried_by: body, at: 40 %, height: -0.2 m}'),
+    code: 'UNKNOWN_WORD',
+    mark: 'body',
+    line: 'wing_structure',
+  },
+  {
+    what: 'a mass per area that burns',
+    text: inStructure(
+      '{mass_per_area: 6 kg/m^2, carried_by: wing, at: 40 %, height: -0.2 m, burns: true}',
+    ).replace('two_up: [pilot', 'two_up: [wing_structure, pilot'),
+    code: 'OVERDETERMINED',
+    mark: 'burns',
+    line: 'wing_structure',
+  },
+  {
+    what: 'a mass per area in kilograms',
+    text: inStructure('{mass_per_area: 6 kg, carried_by: wing, at: 40 %, height: -0.2 m}'),
+    code: 'WRONG_DIMENSION',
+    mark: '6 kg',
+    says: /kg\/m\^2/,
+  },
+  {
+    what: 'a varied mass that follows from the area',
+    text: axis('loading.items.wing_structure.mass: [60 kg, 70 kg]').replace(
+      '{mass: 70 kg, carried_by: wing',
+      '{mass_per_area: 6 kg/m^2, carried_by: wing',
+    ),
+    code: 'DERIVED_VARIED',
+    mark: 'loading.items.wing_structure.mass',
+    says: /mass_per_area/,
+  },
+  {
+    what: 'a varied mass per area beside a mass',
+    text: axis('loading.items.wing_structure.mass_per_area: [5 kg/m^2, 6 kg/m^2]'),
+    code: 'DERIVED_VARIED',
+    mark: 'loading.items.wing_structure.mass_per_area',
+  },
+  {
+    what: 'a mass per area that an axis makes too heavy',
+    text: axis('loading.items.wing_structure.mass_per_area: [5 kg/m^2, 12 kg/m^2]').replace(
+      '{mass: 70 kg, carried_by: wing',
+      '{mass_per_area: 6 kg/m^2, carried_by: wing',
+    ),
+    code: 'OUT_OF_RANGE',
+    mark: '12 kg/m^2',
+    says: /two_up has a mass of 666\.8 kg/,
+  },
+  {
     what: 'a case heavier than the greatest mass',
     text: wholeEdited(['at_most: 650 kg', 'at_most: 590 kg']).replace(
       '  loading.items.fuel.mass: [40 kg, 60 kg]\n',

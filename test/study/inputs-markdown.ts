@@ -13,6 +13,7 @@ const units: Partial<Record<InputDefinition['dimension'], string>> = {
   length: 'm',
   area: 'm²',
   mass: 'kg',
+  mass_per_area: 'kg/m²',
   speed: 'm/s',
   per_angle: '/rad',
   force: 'N',

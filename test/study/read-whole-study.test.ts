@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { studyIdentity } from '../../src/study/identity.ts';
 import { readReplacement } from '../../src/study/replace-number.ts';
 import type { Study } from '../../src/study/study.ts';
-import { baseStudy, edited, read } from './base-study.ts';
+import { baseStudy, edited, errorOf, marked, read } from './base-study.ts';
 import { wholeEdited, wholeStudy } from './whole-study.ts';
 
 const deg = Math.PI / 180;
@@ -107,10 +107,10 @@ describe('choices', () => {
     expect(study.loading).toEqual({
       empty: true,
       items: [
-        { name: 'pilot', carriedBy: 'station', burns: false, always: false },
-        { name: 'passenger', carriedBy: 'station', burns: false, always: false },
-        { name: 'fuel', carriedBy: 'station', burns: true, always: false },
-        { name: 'wing_structure', carriedBy: 'wing', burns: false, always: true },
+        { name: 'pilot', massAs: 'mass', carriedBy: 'station', burns: false, always: false },
+        { name: 'passenger', massAs: 'mass', carriedBy: 'station', burns: false, always: false },
+        { name: 'fuel', massAs: 'mass', carriedBy: 'station', burns: true, always: false },
+        { name: 'wing_structure', massAs: 'mass', carriedBy: 'wing', burns: false, always: true },
       ],
       cases: [
         { name: 'two_up', items: [4, 1, 2, 3] },
@@ -307,6 +307,88 @@ test('what moves with the wing is said with what is held', () => {
   expect(taper?.held).toContain('the masses and stations of the loading (items carried by wing ride along)');
 });
 
+/** Code and mark of the one fault that a text has. */
+function onlyFault(text: string): readonly [string, string] {
+  const error = errorOf(text);
+  expect(error.faults).toHaveLength(1);
+  return [error.faults[0]!.code, marked(error, error.faults[0]!)];
+}
+
+const perArea = ['{mass: 70 kg, carried_by: wing', '{mass_per_area: 1.25 lb/ft^2, carried_by: wing'] as const;
+
+describe('a mass per area of what carries the item', () => {
+  // Foot and pound exact by the agreement of 1959 (from memory).
+  const wing = (1.25 * 0.45359237) / 0.3048 ** 2;
+
+  test('stands in place of the mass', () => {
+    const study = read(wholeEdited(perArea));
+    expect(study.loading?.items[3]).toMatchObject({
+      massAs: 'mass_per_area',
+      carriedBy: 'wing',
+      always: true,
+    });
+    expect(numberOf(study, 'loading.items[4].mass_per_area')).toBeCloseTo(wing, 12);
+    expect(study.inputs.has('loading.items[4].mass')).toBe(false);
+  });
+
+  test('varies by its name, and can be replaced', () => {
+    const study = read(
+      wholeEdited(perArea, [
+        'loading.items.fuel.mass: [40 kg, 60 kg]',
+        'loading.items.wing_structure.mass_per_area: [5 kg/m^2, 6 kg/m^2]',
+      ]),
+    );
+    const axis = study.axes.find(({ paths }) => paths.includes('loading.items[4].mass_per_area'));
+    expect([...(axis?.values[0] ?? [])]).toEqual([5, 6]);
+    expect(readReplacement(study, 'loading.items.wing_structure.mass_per_area = 7.5 kg/m^2')).toEqual({
+      path: 'loading.items[4].mass_per_area',
+      value: 7.5,
+    });
+  });
+
+  test('is told among what follows, and is not held', () => {
+    const heldOf = (text: string, path: string) => read(text).held.find(({ varied }) => varied === path);
+    const varyingArea = wholeEdited(perArea, ['wing.taper: [0.5, 0.62, 0.7]', 'wing.area: [11 m^2, 12 m^2]']);
+    const area = heldOf(varyingArea, 'wing.area');
+    expect(area?.follows).toContain('mass of loading.items.wing_structure');
+    expect(area?.held).toContain(
+      'the masses, masses per area and stations of the loading (items carried by wing ride along)',
+    );
+    const taper = heldOf(wholeEdited(perArea), 'wing.taper');
+    expect(taper?.follows.join()).not.toContain('mass of');
+    const withTail = wholeEdited(
+      [perArea[0], perArea[1].replace('wing', 'tail')],
+      ['area: 2.1 m^2', 'volume: 0.62'],
+      ['choose: tail.area', 'choose: tail.volume'],
+      ['[0.6 m^2, 2.5 m^2]', '[0.3, 0.9]'],
+    );
+    expect(heldOf(withTail, 'wing.taper')?.follows).toContain('mass of loading.items.wing_structure');
+  });
+
+  test('counts towards the greatest mass with the wing of the fixed values', () => {
+    // 310 + 81 + 79 + 60 kg, and 11.4 m² of wing
+    const whole = 530 + 11.4 * wing;
+    const limited = (kilograms: number) =>
+      wholeEdited(perArea, ['at_most: 650 kg', `at_most: ${kilograms} kg`]);
+    expect(read(limited(whole + 1e-6)).loading?.items).toHaveLength(4);
+    expect(onlyFault(limited(whole - 1e-6))).toEqual(['OUT_OF_RANGE', 'two_up']);
+  });
+
+  test('is left out along an axis of masses where the wing varies, unless the rest is too heavy', () => {
+    const fuel = (kilograms: number, vary: string) =>
+      wholeEdited(
+        perArea,
+        ['[40 kg, 60 kg]', `[40 kg, ${kilograms} kg]`],
+        ['wing.taper: [0.5, 0.62, 0.7]', vary],
+      );
+    const constant = 'conditions.cruise.height: [1000 m, 1500 m]';
+    // with the fixed wing's 69.6 kg the case weighs 539.6 kg and its fuel
+    expect(onlyFault(fuel(115, constant))).toEqual(['OUT_OF_RANGE', '115 kg']);
+    expect(read(fuel(115, 'wing.area: [9 m^2, 11.4 m^2]')).axes).toHaveLength(3);
+    expect(onlyFault(fuel(185, 'wing.area: [9 m^2, 11.4 m^2]'))).toEqual(['OUT_OF_RANGE', '185 kg']);
+  });
+});
+
 test('every choice enters the identity of a study', () => {
   const plain = studyIdentity(read(wholeStudy));
   const changes: readonly (readonly [string, string])[] = [
@@ -320,6 +402,7 @@ test('every choice enters the identity of a study', () => {
     ['-1.2 %', '-1.3 %'],
     ['in: [climb, cruise]', 'in: [cruise]'],
     ['name: glide', 'name: descent'],
+    perArea,
   ];
   const identities = changes.map((change) => studyIdentity(read(wholeEdited(change))));
   expect(new Set([plain, ...identities]).size).toBe(changes.length + 1);
