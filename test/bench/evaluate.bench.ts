@@ -24,14 +24,18 @@ function tourer(): Study {
   return { ...readStudyFile('test/plain-tourer.yaml'), skip: [] };
 }
 
-/** The demo tourer: four conditions, power, flaps, loading, trim and the forward limit. */
-function wholeTourer(): Study {
-  return { ...readStudyFile('studies/coastal-tourer.yaml'), skip: [] };
+/** The demo tourer without what it sizes: four conditions, power, flaps, loading, trim and the forward limit. */
+function wholeTourerText(): string {
+  return readFileSync('studies/coastal-tourer.yaml', 'utf8').replace(/^size:.*\n/m, '');
 }
 
-/** The demo tourer with the tail area chosen in each combination so that the aft margin is 8 %. */
+function wholeTourer(): Study {
+  return { ...readStudyText(wholeTourerText(), 'whole-tourer.yaml'), skip: [] };
+}
+
+/** The same with the tail volume chosen in each combination so that the aft margin is 8 %. */
 function sizedTourer(): Study {
-  const text = readFileSync('studies/coastal-tourer.yaml', 'utf8')
+  const text = wholeTourerText()
     .replace(/^ {2}tail\.volume: .*\n/m, '')
     .concat('\nsize: {choose: tail.volume, so_that: static_margin_aft, is: 8 %, between: [0.2, 1.2]}\n');
   return { ...readStudyText(text, 'sized-tourer.yaml'), skip: [] };

@@ -50,12 +50,16 @@ interface Finished {
 /** Runs the program; its own resource usage tells the peak. */
 function runProgram(study: string, out: string, workers: number): Finished {
   const usage = join(out, 'usage.json');
-  const tell = `process.on('exit', () => require('node:fs').writeFileSync(${JSON.stringify(usage)}, JSON.stringify(process.resourceUsage().maxRSS)))`;
+  const tell = `import { writeFileSync } from 'node:fs';
+    import { isMainThread } from 'node:worker_threads';
+    if (isMainThread) process.on('exit', () => {
+      writeFileSync(${JSON.stringify(usage)}, JSON.stringify(process.resourceUsage().maxRSS));
+    });`;
   const start = performance.now();
   const { status, stderr } = spawnSync(
     process.execPath,
     [
-      '--require',
+      '--import',
       `data:text/javascript,${encodeURIComponent(tell)}`,
       program,
       'run',
