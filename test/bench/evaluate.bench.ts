@@ -76,7 +76,9 @@ function engineJob(job: string, study: Study, note: string): Job {
       let rows = 0;
       for (let block = 0; block < blocks; block++) {
         rows += evaluator.evaluate(block * blockSize, blockSize);
-        consumed += evaluator.columns[margin][0];
+        // A sized study leaves rows without a solution empty.
+        const value = evaluator.columns[margin][0];
+        if (!Number.isNaN(value)) consumed += value;
       }
       return rows;
     },
@@ -178,6 +180,6 @@ export async function benchEvaluation(): Promise<BenchRow[]> {
       ),
     ])),
   );
-  if (!Number.isFinite(consumed)) throw new Error('a margin was not computed');
+  if (!(consumed > 0)) throw new Error('a margin was not computed');
   return rows;
 }
