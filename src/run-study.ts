@@ -13,8 +13,10 @@ import { join, parse } from 'node:path';
 import { assembleTable } from './engine/assemble-table.ts';
 import { estimateRun } from './engine/estimate.ts';
 import { evaluateParts } from './engine/evaluate-parts.ts';
+import type { LaidOut } from './engine/lay-out.ts';
 import { layOut } from './engine/lay-out.ts';
 import type { Reporter } from './engine/reporter.ts';
+import type { Sitting } from './engine/run-sitting.ts';
 import { openSitting } from './engine/run-sitting.ts';
 import { MachineError } from './errors.ts';
 import { blockCount, blockSize, partsOf } from './plan/plan.ts';
@@ -23,6 +25,7 @@ import { writeReports } from './reports/write-reports.ts';
 import { checkRoom, freeBytes } from './results/disk.ts';
 import { findParts, removeParts } from './results/part-files.ts';
 import { runPaths } from './results/run-folder.ts';
+import type { Study } from './study/study.ts';
 
 export interface RunOptions {
   readonly studyFile: string;
@@ -60,58 +63,11 @@ export async function runStudy(options: RunOptions, reporter: Reporter): Promise
   if (sitting.state === 'finished') return 'finished';
 
   if (sitting.state === 'evaluating') {
-    const parts = partsOf(plan, sitting.blocksPerPart);
-    const finished = findParts(paths.parts, columns).finished;
-    const present = new Set(finished.map(({ part }) => part));
-    const missing = parts.filter(({ number }) => !present.has(number));
-    const combinationsIn = (blocks: number) => Math.min(blocks * blockSize, plan.combinations);
-    let done = combinationsIn(
-      parts.reduce((sum, part) => (present.has(part.number) ? sum + part.blocks : sum), 0),
-    );
-
-    const estimate = estimateRun(laidOut, (plan.combinations - done) / plan.combinations, options.workers);
-    const bytesThere = finished.reduce((sum, { bytes }) => sum + bytes, 0);
-    const bytesNeeded = Math.max(0, estimate.bytesNeeded - bytesThere);
-    reporter.planned({
-      title: study.title,
-      folder,
-      combinations: plan.combinations,
-      alreadyDone: done,
-      workers: options.workers,
-      bytesNeeded,
-      bytesFree: freeBytes(folder),
-      secondsExpected: estimate.seconds,
-    });
-    checkRoom(folder, bytesNeeded);
-    sitting.begin();
-
-    const { stopped, lost } = await evaluateParts({
-      setup: { study, partsFolder: paths.parts },
-      parts: missing,
-      workers: Math.max(1, Math.min(options.workers, missing.length)),
-      stop: options.stop,
-      onNote: reporter.note,
-      onPart: (part) => {
-        done = Math.min(done + part.blocks * blockSize, plan.combinations);
-        reporter.progress(done, plan.combinations);
-      },
-    }).finally(() => sitting.pause());
-    if (lost.length > 0) throw lostParts(lost, options);
-    if (stopped) {
-      reporter.note(
-        `Stopped. ${done} of ${plan.combinations} combinations are saved in ${folder}; the same command goes on from there.`,
-      );
-      return 'stopped';
-    }
-
+    const run: OpenRun = { study, laidOut, folder, sitting, options, reporter };
+    if ((await evaluateMissing(run)) === 'stopped') return 'stopped';
     reporter.step('Putting the table together');
-    const cases = await assembleTable(
-      folder,
-      findParts(paths.parts, columns).finished,
-      columns,
-      options.workers,
-    );
-    sitting.assembled(cases);
+    const parts = findParts(paths.parts, columns).finished;
+    sitting.assembled(await assembleTable(folder, parts, columns, options.workers));
   }
   removeParts(paths.parts);
 
@@ -130,6 +86,63 @@ export async function runStudy(options: RunOptions, reporter: Reporter): Promise
   const { rows, seconds } = sitting.finish();
   reporter.finished({ folder, combinations: plan.combinations, rows, feasible, seconds });
   return 'finished';
+}
+
+/** A run whose folder is open for evaluation. */
+interface OpenRun {
+  readonly study: Study;
+  readonly laidOut: LaidOut;
+  readonly folder: string;
+  readonly sitting: Sitting;
+  readonly options: RunOptions;
+  readonly reporter: Reporter;
+}
+
+/** Estimates what is missing, refuses a full disk, and has the missing parts evaluated. */
+async function evaluateMissing(run: OpenRun): Promise<'evaluated' | 'stopped'> {
+  const { study, laidOut, folder, sitting, options, reporter } = run;
+  const { plan, columns } = laidOut;
+  const partsFolder = runPaths(folder).parts;
+  const parts = partsOf(plan, sitting.blocksPerPart);
+  const there = findParts(partsFolder, columns).finished;
+  const present = new Set(there.map(({ part }) => part));
+  const missing = parts.filter(({ number }) => !present.has(number));
+  const blocksThere = parts.reduce((sum, part) => (present.has(part.number) ? sum + part.blocks : sum), 0);
+  let done = Math.min(blocksThere * blockSize, plan.combinations);
+
+  const estimate = estimateRun(laidOut, (plan.combinations - done) / plan.combinations, options.workers);
+  const bytesThere = there.reduce((sum, { bytes }) => sum + bytes, 0);
+  const bytesNeeded = Math.max(0, estimate.bytesNeeded - bytesThere);
+  reporter.planned({
+    title: study.title,
+    folder,
+    combinations: plan.combinations,
+    alreadyDone: done,
+    workers: options.workers,
+    bytesNeeded,
+    bytesFree: freeBytes(folder),
+    secondsExpected: estimate.seconds,
+  });
+  checkRoom(folder, bytesNeeded);
+  sitting.begin();
+
+  const { stopped, lost } = await evaluateParts({
+    setup: { study, partsFolder },
+    parts: missing,
+    workers: Math.max(1, Math.min(options.workers, missing.length)),
+    stop: options.stop,
+    onNote: reporter.note,
+    onPart: (part) => {
+      done = Math.min(done + part.blocks * blockSize, plan.combinations);
+      reporter.progress(done, plan.combinations);
+    },
+  }).finally(() => sitting.pause());
+  if (lost.length > 0) throw lostParts(lost, options);
+  if (!stopped) return 'evaluated';
+  reporter.note(
+    `Stopped. ${done} of ${plan.combinations} combinations are saved in ${folder}; the same command goes on from there.`,
+  );
+  return 'stopped';
 }
 
 /** A part is worth some seconds of work: small studies have a few, large ones at most some thousand. */

@@ -9,6 +9,9 @@
 /** Chord fraction of the quarter-chord line, to which sweep, arms and heights refer [-]. */
 export const quarterChord = 0.25;
 
+/** Half chord, as a fraction of the chord [-]. */
+export const halfChord = 0.5;
+
 /** Root chord c_r = 2S / (b(1+λ)) [m] from area [m²], span [m] and taper [-]. Exact. */
 export function rootChordFromArea(area: number, span: number, taper: number): number {
   return (2 * area) / (span * (1 + taper));

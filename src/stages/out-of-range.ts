@@ -3,7 +3,7 @@ import { insideAtmosphere } from '../methods/atmosphere.ts';
 import { quickBodyMomentInRange } from '../methods/body-estimates.ts';
 import { handbookInRange, torenbeekInRange } from '../methods/downwash.ts';
 import { bodyCarryOverInRange, jonesInRange } from '../methods/lift-slope.ts';
-import { sweepTangentAt } from '../methods/planform.ts';
+import { quarterChord, sweepTangentAt } from '../methods/planform.ts';
 import { insideWingTable } from '../methods/wing-table.ts';
 import type { Study } from '../study/study.ts';
 import type { Stage } from './stage.ts';
@@ -70,7 +70,9 @@ function checksOf(study: Study): RangeCheck[] {
   const wing = ['wing_aspect_ratio', 'wing_formula_taper', 'wing_formula_sweep'];
   const tailReads = ['tail_aspect_ratio', 'tail_taper', `tail_sweep_${tail.sweep}`];
   const tailSweep = (A: number, taper: number, sweep: number) =>
-    tail.sweep === 'quarter_chord' ? sweep : Math.atan(sweepTangentAt(Math.tan(sweep), 0, 0.25, A, taper));
+    tail.sweep === 'quarter_chord'
+      ? sweep
+      : Math.atan(sweepTangentAt(Math.tan(sweep), 0, quarterChord, A, taper));
   const checks: RangeCheck[] = [...checksOfEveryStudy];
   const tableForBoth = methods.aerodynamic_centre === 'table' || methods.lift_slope === 'table';
   // the vertical position takes the span efficiency from the table

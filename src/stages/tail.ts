@@ -1,6 +1,8 @@
 import {
   aspectRatio,
+  halfChord,
   meanAerodynamicChord,
+  quarterChord,
   rootChordFromArea,
   spanFromAspectRatio,
   sweepTangentAt,
@@ -13,9 +15,6 @@ import { liftSlopeBy } from './lift-slope.ts';
 import type { Stage } from './stage.ts';
 
 type TailStudy = Pick<Study, 'tail' | 'methods'>;
-
-const quarterChord = 0.25;
-const halfChord = 0.5;
 
 /** Arm and station of the tail: one is given, the other follows. */
 export function tailPlaceStage({ tail }: TailStudy): Stage {

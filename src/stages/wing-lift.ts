@@ -1,12 +1,11 @@
 import { bodyCarryOver } from '../methods/lift-slope.ts';
+import { quarterChord } from '../methods/planform.ts';
 import { tableAerodynamicCentre, tableSpanEfficiency } from '../methods/wing-table.ts';
 import type { Study } from '../study/study.ts';
 import { liftSlopeBy } from './lift-slope.ts';
 import type { Stage } from './stage.ts';
 
 type MethodsStudy = Pick<Study, 'methods'>;
-
-const quarterChord = 0.25;
 
 /**
  * Lift-curve slope of the wing alone.

@@ -11,7 +11,9 @@ import {
   areaFromRootChord,
   aspectRatio,
   equivalentRectangularSpan,
+  halfChord,
   meanGeometricChord,
+  quarterChord,
   rootChordFromArea,
   spanFromAspectRatio,
   spanFromAspectRatioAndRootChord,
@@ -208,7 +210,7 @@ function planformKernel({ panels, rule, inputOf, widthKind, singleTaper }: Planf
       outputs[11][row] = formulaTaper;
       // A sweep that is given is passed on as it is, so that an edge of a formula's range stays an edge.
       outputs[12][row] = sweepAsGiven ? readPanel(inputs, 0, 2, row) : Math.atan(sweepTangent);
-      outputs[13][row] = Math.atan(sweepTangentAt(sweepTangent, 0.25, 0.5, A, formulaTaper));
+      outputs[13][row] = Math.atan(sweepTangentAt(sweepTangent, quarterChord, halfChord, A, formulaTaper));
     }
   };
 }
