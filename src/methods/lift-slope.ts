@@ -1,8 +1,6 @@
 /** Lift-curve slope of wings and tails. Per rad, referred to the surface's own area. */
-import { quarterChord, sweepTangentAt } from './planform.ts';
+import { halfChord, quarterChord, sweepTangentAt } from './planform.ts';
 import { tableLiftSlope, wingTableRange } from './wing-table.ts';
-
-const halfChord = 0.5;
 
 /**
  * Lift slope a = 2πA / (2 + √(A²β²/κ² (1 + tan²Λ_½/β²) + 4)), β² = 1 − M² [1/rad].

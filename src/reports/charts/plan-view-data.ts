@@ -2,7 +2,7 @@ import type { PlanOutline, PlanPoint, PlanViewData } from '../../charts/index.ts
 import { displayUnit } from '../../figures/display.ts';
 import { bodyStationPlace } from '../../methods/body-stations.ts';
 import { panelLeadingEdgeTangent } from '../../methods/panel-planform.ts';
-import { spanwiseStationOfMac, sweepTangentAt } from '../../methods/planform.ts';
+import { quarterChord, spanwiseStationOfMac, sweepTangentAt } from '../../methods/planform.ts';
 import type { BaselinePlaces } from '../../stages/body.ts';
 import { baselinePlaces } from '../../stages/build-stages.ts';
 import type { Study } from '../../study/study.ts';
@@ -11,8 +11,6 @@ import { chartHeading } from '../run-view.ts';
 import type { Pick } from './pick-data.ts';
 
 type Values = ReadonlyMap<string, number>;
-
-const quarterChord = 0.25;
 
 /** Plan-view outlines of the picks, in the study's unit of length. */
 export function planViewData(view: RunView, picks: readonly Pick[]): PlanViewData {
